@@ -1,0 +1,61 @@
+/* SPDX-License-Identifier: GPL-3.0-or-later
+ * What the section is: parts with loops of curves, materials, loads. Filled by the reader, never changed after. */
+#ifndef UTW_OUTLINE_OUTLINE_H
+#define UTW_OUTLINE_OUTLINE_H
+
+#include "outline/curve.h"
+#include "untwist.h"
+
+/** A closed chain of curves: curve[k] ends where curve[k+1] starts, the last where the first starts, bit by bit.
+ *  After reading, outlines run counter-clockwise and holes clockwise (material on the left). */
+typedef struct utw_loop {
+    int n;
+    utw_curve *curve; /* [n], owned */
+    int *vertex;      /* [n], owned: the vertex of the file (0-based) this curve belongs to, for messages */
+} utw_loop;
+
+/** One region of one material. loop[0] is the outline, the others are its holes. */
+typedef struct utw_part {
+    int material; /* index, or -1 for none */
+    int n_loop;
+    utw_loop *loop; /* [n_loop], owned */
+} utw_part;
+
+/** NAN stands for what the file does not give. */
+typedef struct utw_material {
+    char *name;     /* owned */
+    double E;       /* [F/L^2] */
+    double nu;      /* [1], -1 < nu <= 1/2 */
+    double density; /* mass per L^3, as the user means it */
+    double yield;   /* [F/L^2] */
+} utw_material;
+
+/** A load case: forces and moments of design.md's signs; B is the bimoment [F L^2]. */
+typedef struct utw_load {
+    char *name; /* owned */
+    double N, Vx, Vy, T, Mx, My, B;
+    int has_at;   /* 0: Vx, Vy act at the shear centre */
+    double at[2]; /* where Vx, Vy act [L] */
+} utw_load;
+
+struct utw_outline {
+    char *name, *units; /* owned */
+    char length_unit[8], force_unit[8];
+    int n_part, n_material, n_load;
+    utw_part *part;
+    utw_material *material;
+    utw_load *load;
+    double box[4]; /* xmin, ymin, xmax, ymax of all parts [L] */
+};
+
+/** Free what a loop, a part owns (not the struct itself). */
+void utw_loop_clear(utw_loop *loop);
+void utw_part_clear(utw_part *part);
+
+/** Signed area of a loop, positive counter-clockwise [L^2]; exact. */
+double utw_loop_area(const utw_loop *loop);
+
+/** Turn a loop round. Vertex numbers follow their curves. */
+void utw_loop_reverse(utw_loop *loop);
+
+#endif

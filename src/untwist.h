@@ -1,0 +1,212 @@
+/* SPDX-License-Identifier: GPL-3.0-or-later
+ *
+ * untwist: the constants of a bar's cross-section with two-sided bounds, where to load it so that it bends
+ * and does not twist, what happens when it is loaded elsewhere, and the stresses.
+ *
+ * CONVENTIONS (they hold for every function below; docs/theory.md defines every quantity)
+ *
+ *   Axes      x to the right, y up in the plane of the section, z along the bar, right-handed.
+ *   Signs     N > 0 is tension. Vx, Vy are the shear forces on the face whose outward normal is +z.
+ *             T > 0 turns x toward y. Mx = int sigma y dA, My = - int sigma x dA.
+ *   Units     one length [L] and one force [F], those of the section file; nothing is converted. Angles in
+ *             the C API are radians. Each value states its dimension, such as [L^4] or [F/L^2].
+ *   Indices   0-based. Arrays are row-major, shapes are written slowest index first: xy[n][2].
+ *   Ownership "borrowed": the callee keeps no reference after it returns; "returned owned": the caller
+ *             frees it with the matching _free; "returned borrowed": it lives as long as the object.
+ *   Order     object, inputs, options, outputs, error last. The error may be NULL.
+ *   Failure   a status other than UTW_OK leaves the outputs untouched and the inputs unchanged. The library
+ *             never prints, never exits and has no global state. Gmsh has: only one thread at a time may be
+ *             inside utw_solve() or any other function whose comment names the mesher.
+ */
+#ifndef UNTWIST_H
+#define UNTWIST_H
+
+#include <stddef.h>
+
+#ifdef __cplusplus
+extern "C" {
+#endif
+
+#if defined(__GNUC__)
+#define UTW_API __attribute__((visibility("default")))
+#define UTW_CHECK __attribute__((warn_unused_result))
+#else
+#define UTW_API
+#define UTW_CHECK
+#endif
+
+/* ---- statuses and errors ------------------------------------------------------------------------ */
+
+/** What became of a call. The numbers are stable. */
+typedef enum utw_status {
+    UTW_OK = 0,
+    UTW_E_ARGUMENT = 1,      /* a NULL, a wrong size, an option out of range */
+    UTW_E_NOMEM = 2,         /* memory ran out */
+    UTW_E_FILE = 3,          /* a file cannot be opened, read or written */
+    UTW_E_SYNTAX = 4,        /* not JSON, or not what a section file may hold */
+    UTW_E_OUTLINE = 5,       /* loops that cross, do not close, lie outside, are too small ... */
+    UTW_E_MATERIAL = 6,      /* a material that is missing or impossible */
+    UTW_E_LOAD = 7,          /* a load, probe or support that is impossible */
+    UTW_E_MESH = 8,          /* no valid mesh could be made */
+    UTW_E_SINGULAR = 9,      /* the equations could not be factorised */
+    UTW_E_NO_THIN_WALL = 10, /* the section has no thin-walled idealisation */
+    UTW_E_INTERNAL = 11      /* a fault of the library itself */
+} utw_status;
+
+/** A status with its message and the place it speaks of. Owned by the caller; places are 0-based and -1
+ *  when they do not apply. The text counts parts, holes and vertices from 1, as people do. */
+typedef struct utw_error {
+    utw_status status;
+    char text[640];
+    int part, loop, vertex; /* loop 0 is the outline, 1.. the holes */
+    int line, column;       /* of the file, 1-based */
+} utw_error;
+
+/** A short English text for a status. Returned borrowed, never NULL. */
+UTW_API const char *utw_status_text(utw_status status);
+
+/** The version of the library, such as "0.1.0". Returned borrowed. */
+UTW_API const char *utw_version(void);
+
+/* ---- the section: what is given ------------------------------------------------------------------ */
+
+/** A cross-section as drawn: parts, materials, loads; checked when it is read. */
+typedef struct utw_outline utw_outline;
+
+/** Read a section file (docs/section-file.md). [in] path, borrowed: "-" is standard input.
+ *  [out] *outline, returned owned: utw_outline_free().
+ *  UTW_E_FILE, UTW_E_SYNTAX, UTW_E_OUTLINE, UTW_E_MATERIAL, UTW_E_LOAD, UTW_E_NOMEM; the message names file,
+ *  part, loop, vertex and remedy. */
+UTW_API UTW_CHECK utw_status utw_outline_read(const char *path, utw_outline **outline, utw_error *err);
+
+/** The same from text[n] in memory; `name` stands for the file in messages. */
+UTW_API UTW_CHECK utw_status utw_outline_parse(const char *text, size_t n, const char *name,
+                                               utw_outline **outline, utw_error *err);
+
+/** Free an outline; NULL is allowed. */
+UTW_API void utw_outline_free(utw_outline *outline);
+
+/** The name in the file ("" when it has none). Returned borrowed. */
+UTW_API const char *utw_outline_name(const utw_outline *outline);
+
+/** The units in the file, such as "mm N". Returned borrowed. */
+UTW_API const char *utw_outline_units(const utw_outline *outline);
+
+/* ---- constants ----------------------------------------------------------------------------------- */
+
+/** How far a number can be trusted. */
+typedef enum utw_trust {
+    UTW_EXACT = 0,   /* closed boundary integral: exact to rounding; low = high = value */
+    UTW_BRACKET = 1, /* two-sided bounds from two independent variational solutions */
+    UTW_ESTIMATE = 2 /* low and high from the change between two orders: an estimate, not a bound */
+} utw_trust;
+
+/** A number with its bounds and their kind. */
+typedef struct utw_quantity {
+    double value, low, high;
+    utw_trust trust;
+} utw_quantity;
+
+/** The constants of a section. Second moments and what follows from them are about the centroid, in the
+ *  directions of the drawing's axes. docs/theory.md defines each. */
+typedef enum utw_constant {
+    UTW_A = 0,     /* area [L^2] */
+    UTW_PERIMETER, /* length of all loops, holes included [L] */
+    UTW_XC,        /* centroid, in the drawing's coordinates [L] */
+    UTW_YC,
+    UTW_IXX, /* int y^2 dA [L^4] */
+    UTW_IYY, /* int x^2 dA [L^4] */
+    UTW_IXY, /* int x y dA [L^4] */
+    UTW_I1,  /* greater principal second moment [L^4] */
+    UTW_I2,  /* smaller one [L^4] */
+    UTW_ANGLE, /* from the x axis to the axis of I1, counter-clockwise, in (-pi/2, pi/2] [rad] */
+    UTW_RX,    /* radii of gyration sqrt(Ixx/A), sqrt(Iyy/A) [L] */
+    UTW_RY,
+    UTW_WX_TOP, /* elastic moduli Ixx / distance of the extreme fibre [L^3] */
+    UTW_WX_BOTTOM,
+    UTW_WY_LEFT,
+    UTW_WY_RIGHT,
+    UTW_ZX, /* plastic moduli about the axes parallel to x and y that halve the area [L^3] */
+    UTW_ZY,
+    UTW_XP, /* where those axes lie: the plastic neutral axes x = xp, y = yp [L] */
+    UTW_YP,
+    UTW_J,  /* Saint-Venant torsion constant [L^4] */
+    UTW_WT, /* torsion modulus T / greatest torsional shear stress [L^3] */
+    UTW_XS, /* shear centre (energy definition, free of Poisson's ratio), drawing's coordinates [L] */
+    UTW_YS,
+    UTW_XF, /* centre of flexure at the material's Poisson's ratio (mean twist zero) [L] */
+    UTW_YF,
+    UTW_IW,  /* warping constant about the shear centre [L^6] */
+    UTW_ASX, /* shear areas V^2 / int |tau|^2 dA, load through the shear centre [L^2] */
+    UTW_ASY,
+    UTW_KX, /* shear factors Asx/A, Asy/A [1] */
+    UTW_KY,
+    UTW_BETAX, /* monosymmetry (Wagner) coefficients [L] */
+    UTW_BETAY,
+    UTW_R0, /* polar radius about the shear centre [L] */
+    UTW_CONSTANT_COUNT
+} utw_constant;
+
+/** Key of a constant in results, such as "Ixx". Returned borrowed; NULL when `which` is out of range. */
+UTW_API const char *utw_constant_key(utw_constant which);
+
+/** What it is, in a few words. Returned borrowed; NULL when out of range. */
+UTW_API const char *utw_constant_meaning(utw_constant which);
+
+/** Its dimension as a power of the length; angles and factors are 0. */
+UTW_API int utw_constant_power(utw_constant which);
+
+/* ---- the solid solution -------------------------------------------------------------------------- */
+
+/** How to solve. Start from UTW_OPTIONS_INIT. */
+typedef struct utw_options {
+    int version;       /* 1 */
+    double tolerance;  /* stop when (J_high - J_low)/J is at most this; 1e-12 .. 0.5 */
+    int fixed_order;   /* 0: orders are chosen element by element; 1..12: this order everywhere, once */
+    int max_rounds;    /* at most so many solutions */
+    int max_unknowns;  /* give up refining beyond so many unknowns of one problem */
+    double mesh_scale; /* factor on the element size that follows from the wall thickness; 1 */
+} utw_options;
+
+#define UTW_OPTIONS_INIT {1, 1e-6, 0, 12, 2000000, 1.0}
+
+/** The solved section. */
+typedef struct utw_solution utw_solution;
+
+/** Solve torsion and flexure of a section. [in] outline, borrowed; it must outlive the solution.
+ *  [in] options, borrowed; NULL for the defaults. [out] *solution, returned owned: utw_solution_free().
+ *  Calls the mesher. When the tolerance is not reached the status is still UTW_OK and
+ *  utw_solution_info() says so: the brackets hold all the same.
+ *  Sources: docs/theory.md (Prager and Synge 1947; Trefftz 1935; Szabo and Babuska 1991).
+ *  UTW_E_ARGUMENT, UTW_E_NOMEM, UTW_E_MESH, UTW_E_SINGULAR. */
+UTW_API UTW_CHECK utw_status utw_solve(const utw_outline *outline, const utw_options *options,
+                                       utw_solution **solution, utw_error *err);
+
+/** Free a solution; NULL is allowed. */
+UTW_API void utw_solution_free(utw_solution *solution);
+
+/** One constant. [out] *quantity. UTW_E_ARGUMENT when out of range; UTW_E_MATERIAL when the constant needs
+ *  a Poisson's ratio (xf, yf, Asx, Asy, kx, ky) and the section has no material. */
+UTW_API UTW_CHECK utw_status utw_solution_constant(const utw_solution *solution, utw_constant which,
+                                                   utw_quantity *quantity, utw_error *err);
+
+/** What the solution took. */
+typedef struct utw_solution_info {
+    int least_order, greatest_order; /* of the elements */
+    int triangles;
+    int unknowns;      /* of the warping problem, element interiors included */
+    int skeleton;      /* of them left after condensation */
+    int rounds;        /* solutions */
+    double gap;        /* (J_high - J_low)/J */
+    double tolerance;  /* asked for */
+    int reached;       /* 1 when gap <= tolerance */
+    double seconds_mesh, seconds_solve; /* wall clock */
+} utw_solution_info;
+
+/** Fill *info. */
+UTW_API void utw_solution_get_info(const utw_solution *solution, utw_solution_info *info);
+
+#ifdef __cplusplus
+}
+#endif
+#endif
