@@ -1,14 +1,16 @@
 /* SPDX-License-Identifier: GPL-3.0-or-later
- * Whether an outline can be a cross-section at all: called once when it is read, before anything is computed. */
+ * Whether an outline can be a cross-section at all: called once when it is read, before anything is
+ * computed. */
 #ifndef UTW_OUTLINE_CHECK_H
 #define UTW_OUTLINE_CHECK_H
 
 #include "outline/outline.h"
 
-/** Check every loop (finite numbers, scale, zero-length curves, crossing itself or touching itself, turning back on
- *  itself), every part (loops crossing or touching one another, holes outside their outline or inside another hole) and
- *  the parts against one another (overlap). Outlines must run counter-clockwise, holes clockwise already.
- *  UTW_E_OUTLINE with part, loop, vertex, what is wrong and what to do; UTW_E_NOMEM. */
+/** Check every loop (finite numbers, scale, zero-length curves, crossing itself or touching itself,
+ * turning back on itself), every part (loops crossing or touching one another, holes outside their
+ * outline or inside another hole) and the parts against one another (overlap). Outlines must run
+ * counter-clockwise, holes clockwise already. UTW_E_OUTLINE with part, loop, vertex, what is wrong
+ * and what to do; UTW_E_NOMEM. */
 utw_status utw_outline_check(const utw_outline *outline, utw_error *err);
 
 #endif
