@@ -11,7 +11,8 @@
 typedef struct utw_loop {
     int n;
     utw_curve *curve; /* [n], owned */
-    int *vertex;      /* [n], owned: the vertex of the file (0-based) this curve belongs to, for messages */
+    int *vertex;      /* [n], owned: the vertex of the file (0-based) this curve leads to as drawn (an outline that
+                   * is turned round keeps the numbers), or the one it rounds or cuts; for messages */
 } utw_loop;
 
 /** One region of one material. loop[0] is the outline, the others are its holes. */
