@@ -1,5 +1,6 @@
 /* SPDX-License-Identifier: GPL-3.0-or-later
  * One loop of a section file: an array of vertices, a circle or an ellipse. */
+#include <stdio.h>
 #include <string.h>
 
 #include "base/memory.h"
@@ -7,30 +8,36 @@
 #include "outline/chain.h"
 #include "outline/read.h"
 
-/* The points of a join: [x, y] for an arc, two of them for a Bezier curve. target: utw_vertex. */
-static utw_status read_join(utw_reader *r, const utw_json *value, const char *what, void *target,
+/* The points of a join: one [x, y] for an arc, an array of them for curves. */
+static utw_status read_join(utw_reader *r, const utw_json *value, const char *what, utw_vertex *v,
                             utw_join join)
 {
-    utw_vertex *v = target;
-    utw_status st = UTW_OK;
-    const int n = join == UTW_JOIN_ARC ? 1 : 2;
-    int count = 1;
-    if (join == UTW_JOIN_BEZIER) {
-        st = utw_read_array(r, value, what, UTW_MOST_VERTICES, &count);
-        if (st == UTW_OK && count != 2)
-            st = utw_fail(r->err, UTW_E_SYNTAX,
-                          "%s must be two control points [[x, y], [x, y]]; it has %d", what, count);
+    int n = 1;
+    if (join != UTW_JOIN_ARC) {
+        const utw_status st = utw_read_array(r, value, what, UTW_MOST_VERTICES, &n);
         if (st != UTW_OK) return st;
+        if (join == UTW_JOIN_BEZIER && n != 2)
+            return utw_fail(r->err, UTW_E_SYNTAX,
+                            "%s must be two control points [[x, y], [x, y]]; it has %d", what, n);
+        if (n == 0)
+            return utw_fail(
+                r->err, UTW_E_SYNTAX,
+                "%s is empty; list the points between the two vertices, or leave it out", what);
     }
     v->join = join;
+    utw_free(v->point); /* of another join; read_vertex() refuses two */
     v->point = utw_alloc((size_t)n, sizeof *v->point);
     if (v->point == NULL) return utw_fail(r->err, UTW_E_NOMEM, "out of memory (%s)", what);
     v->n_point = n;
     if (join == UTW_JOIN_ARC) return utw_read_point(r, value, what, v->point[0]);
     int k = 0;
-    for (const utw_json *m = utw_json_first(value); m != NULL && st == UTW_OK; m = utw_json_next(m))
-        st = utw_read_point(r, m, "a point of \"bezier\"", v->point[k++]);
-    return st;
+    for (const utw_json *m = utw_json_first(value); m != NULL; m = utw_json_next(m), k++) {
+        char name[64];
+        snprintf(name, sizeof name, "point %d of %s", k + 1, what);
+        const utw_status st = utw_read_point(r, m, name, v->point[k]);
+        if (st != UTW_OK) return st;
+    }
+    return UTW_OK;
 }
 
 static utw_status read_arc(utw_reader *r, const utw_json *value, const char *what, void *target)
@@ -43,6 +50,11 @@ static utw_status read_bezier(utw_reader *r, const utw_json *value, const char *
     return read_join(r, value, what, target, UTW_JOIN_BEZIER);
 }
 
+static utw_status read_through(utw_reader *r, const utw_json *value, const char *what, void *target)
+{
+    return read_join(r, value, what, target, UTW_JOIN_THROUGH);
+}
+
 static utw_status read_bulge(utw_reader *r, const utw_json *value, const char *what, void *target)
 {
     utw_vertex *v = target;
@@ -50,13 +62,41 @@ static utw_status read_bulge(utw_reader *r, const utw_json *value, const char *w
     return utw_read_number(r, value, what, &v->bulge);
 }
 
+static utw_status read_round(utw_reader *r, const utw_json *value, const char *what, void *target)
+{
+    utw_vertex *v = target;
+    v->corner = UTW_CORNER_ROUND;
+    return utw_read_number(r, value, what, &v->size);
+}
+
+static utw_status read_chamfer(utw_reader *r, const utw_json *value, const char *what, void *target)
+{
+    utw_vertex *v = target;
+    v->corner = UTW_CORNER_CHAMFER;
+    return utw_read_number(r, value, what, &v->size);
+}
+
 static const utw_key vertex_key[] = {
     {"at", utw_read_point, offsetof(utw_vertex, at)},
+    {"round", read_round, 0},
+    {"chamfer", read_chamfer, 0},
     {"arc", read_arc, 0},
     {"bulge", read_bulge, 0},
     {"bezier", read_bezier, 0},
+    {"through", read_through, 0},
 };
-enum { N_KEY = sizeof vertex_key / sizeof vertex_key[0], JOINS = 0xE };
+enum {
+    N_KEY = sizeof vertex_key / sizeof vertex_key[0],
+    AT = 1,
+    CORNERS = 0x06, /* round, chamfer */
+    JOINS = 0x78    /* arc, bulge, bezier, through */
+};
+
+/* More than one bit is set. */
+static int several(unsigned bits)
+{
+    return (bits & (bits - 1)) != 0;
+}
 
 static utw_status read_vertex(utw_reader *r, const utw_json *value, utw_vertex *v)
 {
@@ -70,14 +110,16 @@ static utw_status read_vertex(utw_reader *r, const utw_json *value, utw_vertex *
     unsigned given = 0;
     const utw_status st = utw_read_object(r, value, "the vertex", vertex_key, N_KEY, v, &given);
     if (st != UTW_OK) return st;
-    if (!(given & 1u))
+    if (!(given & AT))
         return utw_fail(r->err, UTW_E_SYNTAX,
                         "\"at\" is missing; give the point [x, y] of the vertex");
-    const unsigned joins = given & JOINS;
-    if (joins & (joins - 1))
+    if (several(given & CORNERS))
+        return utw_fail(r->err, UTW_E_SYNTAX,
+                        "a corner is rounded or cut, not both; keep one of \"round\", \"chamfer\"");
+    if (several(given & JOINS))
         return utw_fail(r->err, UTW_E_SYNTAX,
                         "the edge to this vertex is given in two ways; keep one of \"arc\", "
-                        "\"bulge\", \"bezier\"");
+                        "\"bulge\", \"bezier\", \"through\"");
     return UTW_OK;
 }
 

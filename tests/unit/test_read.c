@@ -12,10 +12,12 @@ static const char *const full =
     "             {\"name\": \"all\", \"N\": 1, \"Vx\": 2, \"Vy\": 3, \"T\": 4, \"Mx\": 5, \"My\": "
     "6, \"B\": 7}],"
     " \"parts\": [{\"material\": \"6082\","
-    "              \"outline\": [[0,100], [20,100], [20,20], {\"at\": [100,20], \"bulge\": -0.1},"
+    "              \"outline\": [[0,100], [20,100], {\"at\": [20,20], \"round\": 6}, {\"at\": "
+    "[100,20], \"bulge\": -0.1},"
     "                            {\"at\": [100,0], \"arc\": [108,10]}, {\"at\": [0,0], \"bezier\": "
     "[[60,-3],[30,3]]}],"
-    "              \"holes\": [{\"circle\": [10,10,4]}, [[60,5],[70,5],[65,10]]]},"
+    "              \"holes\": [{\"circle\": [10,10,4]}, [{\"at\": [60,5], \"chamfer\": "
+    "1},[70,5],{\"at\": [65,10], \"through\": [[69,7],[68,9]]}]]},"
     "             {\"outline\": {\"ellipse\": [200, 0, 9, 5, 30]}, \"material\": \"steel\"}],"
     " \"materials\": {\"steel\": {\"E\": 210000, \"nu\": 0.3},"
     "                \"6082\": {\"E\": 70000, \"nu\": 0.33, \"density\": 2.7e-6, \"yield\": 250}}}";
@@ -37,7 +39,9 @@ static void everything_is_read(void **state)
     assert_int_equal(o->part[0].material, 1);
     assert_int_equal(o->part[1].material, 0);
     assert_int_equal(o->part[0].n_loop, 3);
-    assert_int_equal(o->part[0].loop[0].n, 6);
+    assert_int_equal(o->part[0].loop[0].n, 7);
+    assert_int_equal(o->part[0].loop[2].n,
+                     6); /* three edges, one of three pieces, and the chamfer */
     assert_int_equal(o->n_load, 2);
     const utw_load *hook = &o->load[0], *all = &o->load[1];
     assert_true(hook->has_at && hook->at[0] == 30 && hook->at[1] == 0 && hook->Vy == -1500 &&
