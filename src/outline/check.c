@@ -11,6 +11,7 @@
 #include "outline/check_curve.h"
 #include "outline/curvelist.h"
 #include "outline/intersect.h"
+#include "outline/net.h"
 
 enum { MAX_CURVES = 200000 };
 
@@ -43,8 +44,8 @@ static void meeting_text(char *text, size_t size, const checking *x, const utw_c
                          const utw_curve_ref *b, int shared, utw_meeting *m)
 {
     const double touch = UTW_TOUCH * x->size;
-    if (utw_curves_meet(a->curve, b->curve, shared, touch, m) == 0) {
-        snprintf(text, size, "comes within %.2g of", fmax(m->distance, touch));
+    if (!utw_curves_narrow(a->curve, b->curve, shared, touch, m)) {
+        snprintf(text, size, "comes within %.2g of", m->distance);
         return;
     }
     double p[2], q[2];
@@ -186,6 +187,7 @@ utw_status utw_outline_check(const utw_outline *outline, utw_error *err)
 {
     utw_status st = UTW_E_INTERNAL;
     utw_curve_list list = {.n = 0};
+    utw_net *net = NULL; /* built to see whether the parts fit together */
     double size = 0;
     UTW_TRY(check_count(outline, err));
     UTW_TRY(utw_check_scale(outline, &size, err));
@@ -198,8 +200,11 @@ utw_status utw_outline_check(const utw_outline *outline, utw_error *err)
         st = x.st;
         goto done;
     }
-    st = check_nesting(&x);
+    UTW_TRY(check_nesting(&x));
+    if (outline->n_part > 1) UTW_TRY(utw_net_create(outline, &net, err));
+    st = UTW_OK;
 done:
+    utw_net_free(net);
     utw_curve_list_clear(&list);
     return st;
 }

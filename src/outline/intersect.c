@@ -150,6 +150,19 @@ int utw_curves_meet(const utw_curve *a, const utw_curve *b, int shared, double t
     return x.found;
 }
 
+int utw_curves_narrow(const utw_curve *a, const utw_curve *b, int shared, double touch,
+                      utw_meeting *meeting)
+{
+    for (;;) {
+        const double tolerance = fmax(touch, meeting->distance / 2);
+        utw_meeting nearer;
+        /* a search that gave up has no distance to go on with */
+        if (utw_curves_meet(a, b, shared, tolerance, &nearer) != 1) return 0;
+        *meeting = nearer;
+        if (tolerance <= touch) return 1;
+    }
+}
+
 /* ---- a curve and itself
  * -------------------------------------------------------------------------- */
 

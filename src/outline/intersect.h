@@ -26,6 +26,12 @@ typedef struct utw_meeting {
 int utw_curves_meet(const utw_curve *a, const utw_curve *b, int shared, double tolerance,
                     utw_meeting *meeting);
 
+/** Narrow a meeting that was found down to the place where the curves come nearest (to a factor of
+ * two in the distance). Returns 1 when they come within `touch` [L] there, else 0. [in, out]
+ * *meeting. */
+int utw_curves_narrow(const utw_curve *a, const utw_curve *b, int shared, double touch,
+                      utw_meeting *meeting);
+
 /** What a curve does to itself. */
 typedef enum utw_self {
     UTW_SELF_NONE,
