@@ -18,7 +18,7 @@ static const char *const full =
     "[[60,-3],[30,3]]}],"
     "              \"holes\": [{\"circle\": [10,10,4]}, [{\"at\": [60,5], \"chamfer\": "
     "1},[70,5],{\"at\": [65,10], \"through\": [[69,7],[68,9]]}]]},"
-    "             {\"outline\": {\"ellipse\": [200, 0, 9, 5, 30]}, \"material\": \"steel\"}],"
+    "             {\"outline\": {\"ellipse\": [10, 10, 4, 4, 30]}, \"material\": \"steel\"}],"
     " \"materials\": {\"steel\": {\"E\": 210000, \"nu\": 0.3},"
     "                \"6082\": {\"E\": 70000, \"nu\": 0.33, \"density\": 2.7e-6, \"yield\": 250}}}";
 
