@@ -16,21 +16,28 @@ int utw_word_distance(const char *a, const char *b)
 {
     const size_t na = strlen(a), nb = strlen(b);
     if (na > LONGEST || nb > LONGEST) return FAR;
-    int row[LONGEST + 1]; /* distances from the first i characters of a to every prefix of b */
-    for (size_t j = 0; j <= nb; j++) row[j] = (int)j;
+    /* rows i-2, i-1 and i of the table of distances between prefixes */
+    int table[3][LONGEST + 1];
+    int *older = table[0], *above = table[1], *row = table[2];
+    for (size_t j = 0; j <= nb; j++) above[j] = (int)j;
     for (size_t i = 1; i <= na; i++) {
-        int diagonal = row[0];
         row[0] = (int)i;
         for (size_t j = 1; j <= nb; j++) {
-            const int above = row[j];
-            int least = diagonal + (lower(a[i - 1]) != lower(b[j - 1]));
-            if (above + 1 < least) least = above + 1;
+            const int x = lower(a[i - 1]), y = lower(b[j - 1]);
+            int least = above[j - 1] + (x != y);
+            if (above[j] + 1 < least) least = above[j] + 1;
             if (row[j - 1] + 1 < least) least = row[j - 1] + 1;
-            diagonal = above;
+            if (i > 1 && j > 1 && x == lower(b[j - 2]) && y == lower(a[i - 2]) &&
+                older[j - 2] + 1 < least)
+                least = older[j - 2] + 1;
             row[j] = least;
         }
+        int *const free_row = older;
+        older = above;
+        above = row;
+        row = free_row;
     }
-    return row[nb];
+    return above[nb];
 }
 
 int utw_nearest_word(const char *word, const char *const *candidate, int n)

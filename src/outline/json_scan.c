@@ -143,10 +143,33 @@ static utw_status scan_string(scan *s)
     return UTW_OK;
 }
 
+/* true, false, null; other words get the remedy that fits. */
+static utw_status scan_word(scan *s)
+{
+    const size_t start = s->i;
+    while (is_letter(s, s->i)) s->i++;
+    const size_t length = s->i - start;
+    const char *word = s->text + start;
+    if ((length == 4 && (memcmp(word, "true", 4) == 0 || memcmp(word, "null", 4) == 0)) ||
+        (length == 5 && memcmp(word, "false", 5) == 0))
+        return UTW_OK;
+    const int shown = length < 20 ? (int)length : 20;
+    const char c = word[0];
+    if (c == 'N' || c == 'n' || c == 'I' || c == 'i')
+        return FAIL(s, start, "%.*s is not a number; every number must be finite and written out",
+                    shown, word);
+    return FAIL(s, start, "%.*s must stand in double quotes", shown, word);
+}
+
 static utw_status scan_number(scan *s)
 {
     const size_t start = s->i;
     size_t i = start + (s->text[start] == '-');
+    if (is_letter(s, i)) {
+        s->i = i;
+        return scan_word(s) == UTW_OK ? FAIL(s, start, "a minus sign must be followed by a digit")
+                                      : UTW_E_SYNTAX;
+    }
     if (!is_digit(s, i)) return FAIL(s, start, "a minus sign must be followed by a digit");
     if (s->text[i] == '0' && is_digit(s, i + 1))
         return FAIL(s, start, "a number may not start with 0; write 5, not 05");
@@ -166,24 +189,6 @@ static utw_status scan_number(scan *s)
                     i - start, LONGEST_NUMBER);
     s->i = i;
     return UTW_OK;
-}
-
-/* true, false, null; other words get the remedy that fits. */
-static utw_status scan_word(scan *s)
-{
-    const size_t start = s->i;
-    while (is_letter(s, s->i)) s->i++;
-    const size_t length = s->i - start;
-    const char *word = s->text + start;
-    if ((length == 4 && (memcmp(word, "true", 4) == 0 || memcmp(word, "null", 4) == 0)) ||
-        (length == 5 && memcmp(word, "false", 5) == 0))
-        return UTW_OK;
-    const int shown = length < 20 ? (int)length : 20;
-    const char c = word[0];
-    if (c == 'N' || c == 'n' || c == 'I' || c == 'i')
-        return FAIL(s, start, "%.*s is not a number; every number must be finite and written out",
-                    shown, word);
-    return FAIL(s, start, "%.*s must stand in double quotes", shown, word);
 }
 
 static utw_status unexpected(scan *s, const char *wanted)

@@ -35,7 +35,7 @@ typedef struct utw_key {
     size_t offset;
 } utw_key;
 
-/** Read an object, called `what` in messages, whose keys are among key[n_key] (n_key <= 32).
+/** Read an object, called `what` when it is none, whose keys are among key[n_key] (n_key <= 32).
  * Unknown and repeated keys are UTW_E_SYNTAX. [out] *given (may be NULL): bit k is set when key[k]
  * was there. */
 utw_status utw_read_object(utw_reader *r, const utw_json *object, const char *what,

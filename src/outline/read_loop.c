@@ -101,7 +101,7 @@ static int several(unsigned bits)
 static utw_status read_vertex(utw_reader *r, const utw_json *value, utw_vertex *v)
 {
     if (utw_json_kind_of(value) == UTW_JSON_ARRAY)
-        return utw_read_point(r, value, "a vertex", v->at);
+        return utw_read_point(r, value, "the vertex", v->at);
     if (utw_json_kind_of(value) != UTW_JSON_OBJECT)
         return utw_fail(
             r->err, UTW_E_SYNTAX,

@@ -20,8 +20,7 @@ static utw_status wrong_kind(utw_reader *r, const utw_json *value, const char *w
 #define SHOWN       "%.60s%s"
 #define shown(word) word, strlen(word) > 60 ? "..." : ""
 
-static utw_status unknown_key(utw_reader *r, const char *name, const char *what, const utw_key *key,
-                              int n_key)
+static utw_status unknown_key(utw_reader *r, const char *name, const utw_key *key, int n_key)
 {
     const char *known[32];
     char list[256] = "";
@@ -34,11 +33,10 @@ static utw_status unknown_key(utw_reader *r, const char *name, const char *what,
     }
     const int near = utw_nearest_word(name, known, n_key);
     if (near >= 0)
-        return utw_fail(r->err, UTW_E_SYNTAX,
-                        "%s has the unknown key \"" SHOWN "\"; did you mean \"%s\"?", what,
+        return utw_fail(r->err, UTW_E_SYNTAX, "unknown key \"" SHOWN "\"; did you mean \"%s\"?",
                         shown(name), known[near]);
-    return utw_fail(r->err, UTW_E_SYNTAX, "%s has the unknown key \"" SHOWN "\"; known keys: %s",
-                    what, shown(name), list);
+    return utw_fail(r->err, UTW_E_SYNTAX, "unknown key \"" SHOWN "\"; known here: %s", shown(name),
+                    list);
 }
 
 utw_status utw_read_object(utw_reader *r, const utw_json *object, const char *what,
@@ -51,9 +49,9 @@ utw_status utw_read_object(utw_reader *r, const utw_json *object, const char *wh
     for (const utw_json *m = utw_json_first(object); m != NULL; m = utw_json_next(m)) {
         int k = 0;
         while (k < n_key && strcmp(key[k].name, utw_json_key(m)) != 0) k++;
-        if (k == n_key) return unknown_key(r, utw_json_key(m), what, key, n_key);
+        if (k == n_key) return unknown_key(r, utw_json_key(m), key, n_key);
         if (seen & 1u << k)
-            return utw_fail(r->err, UTW_E_SYNTAX, "%s has the key \"%s\" twice; remove one", what,
+            return utw_fail(r->err, UTW_E_SYNTAX, "the key \"%s\" is given twice; remove one",
                             key[k].name);
         seen |= 1u << k;
     }
@@ -87,6 +85,16 @@ utw_status utw_read_number(utw_reader *r, const utw_json *value, const char *wha
     return UTW_OK;
 }
 
+/* Name number k of a value called `what` after its place in `form`: "y of "at"" by "a point [x,
+ * y]". */
+static void name_number(char *name, size_t size, const char *form, int k, const char *what)
+{
+    const char *start = strchr(form, '[');
+    for (; start != NULL && k > 0; k--) start = strchr(start + 1, ',');
+    start = start == NULL ? "" : start + 1 + strspn(start + 1, " ");
+    snprintf(name, size, "%.*s of %.60s", (int)strcspn(start, ",]"), start, what);
+}
+
 utw_status utw_read_numbers(utw_reader *r, const utw_json *value, const char *what,
                             const char *form, int least, int most, double *number, int *n)
 {
@@ -96,14 +104,14 @@ utw_status utw_read_numbers(utw_reader *r, const utw_json *value, const char *wh
         return utw_fail(r->err, UTW_E_SYNTAX, "%s must be %s, not %s", what, form,
                         utw_json_kind_text(value));
     if (count < least || count > most)
-        return utw_fail(r->err, UTW_E_SYNTAX, "%s must be %s; it has %d number%s", what, form,
+        return utw_fail(r->err, UTW_E_SYNTAX, "%s must be %s; it has %d member%s", what, form,
                         count, count == 1 ? "" : "s");
     int k = 0;
     for (const utw_json *m = utw_json_first(value); m != NULL; m = utw_json_next(m), k++) {
-        char name[96];
-        snprintf(name, sizeof name, "number %d of %.60s", k + 1, what);
-        const utw_status st = utw_read_number(r, m, name, &number[k]);
-        if (st != UTW_OK) return st;
+        if (utw_read_number(r, m, what, &number[k]) == UTW_OK) continue;
+        char name[96]; /* again, for the message; nothing is spent on names while all goes well */
+        name_number(name, sizeof name, form, k, what);
+        return utw_read_number(r, m, name, &number[k]);
     }
     *n = count;
     return UTW_OK;

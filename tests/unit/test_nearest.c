@@ -7,6 +7,7 @@ static void distance_counts_edits(void **state)
     (void)state;
     assert_int_equal(utw_word_distance("kitten", "sitting"), 3); /* two changes and an insertion */
     assert_int_equal(utw_word_distance("", "abc"), 3);
+    assert_int_equal(utw_word_distance("laods", "loads"), 1);
     assert_int_equal(utw_word_distance("outline", "Outline"), 0);
     assert_int_equal(utw_word_distance("flaw", "lawn"), 2);
     char longer[80];

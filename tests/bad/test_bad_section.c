@@ -1,0 +1,266 @@
+/* SPDX-License-Identifier: GPL-3.0-or-later
+ * Every file of this folder is refused with its own status, place and message. */
+#include <dirent.h>
+#include <unistd.h>
+
+#include "support/support.h"
+
+static const struct {
+    const char *name; /* of the file, without .json */
+    utw_status status;
+    int part, loop, vertex;
+    const char *message; /* without the name of the file */
+} row[] = {
+    {"arc_in_line", UTW_E_OUTLINE, 0, 0, 2,
+     "part 1, outline, vertex 3: there is no arc from (40, 0) through (40, 12) to (40, 30): the "
+     "three points lie in line or coincide; move the point of \"arc\", or leave it out for a "
+     "straight edge"},
+    {"arc_of_two_points", UTW_E_SYNTAX, 0, 0, 2,
+     "part 1, outline, vertex 3: x of \"arc\" must be a number, not an array"},
+    {"bezier_one_point", UTW_E_SYNTAX, 0, 0, 2,
+     "part 1, outline, vertex 3: \"bezier\" must be two control points [[x, y], [x, y]]; it has 1"},
+    {"bulge_absurd", UTW_E_OUTLINE, 0, 0, 2,
+     "part 1, outline, vertex 3: a \"bulge\" of 100 turns through 357.7 degrees, nearly a whole "
+     "circle; \"bulge\" is the tangent of a quarter of the arc's angle: 1 for a semicircle"},
+    {"bulge_zero", UTW_E_OUTLINE, 0, 0, 2,
+     "part 1, outline, vertex 3: a \"bulge\" of 0 is a straight edge; leave it out"},
+    {"chamfer_does_not_fit", UTW_E_OUTLINE, 0, 0, 2,
+     "part 1, outline, vertex 3: \"chamfer\": 30.5 does not fit between its two edges; the "
+     "greatest that fits is 30"},
+    {"chamfer_negative", UTW_E_OUTLINE, 0, 0, 2,
+     "part 1, outline, vertex 3: \"chamfer\" is -2; it must be greater than 0, or left out"},
+    {"circle_and_ellipse", UTW_E_SYNTAX, 0, 0, -1,
+     "part 1, outline: a loop is a circle or an ellipse, not both; remove one"},
+    {"circle_radius_negative", UTW_E_OUTLINE, 0, 0, -1,
+     "part 1, outline: the radius of the circle is -5; it must be greater than 0"},
+    {"circle_two_numbers", UTW_E_SYNTAX, 0, 0, -1,
+     "part 1, outline: \"circle\" must be [xc, yc, r]; it has 2 members"},
+    {"closing_vertex", UTW_E_OUTLINE, 0, 0, 4,
+     "part 1, outline, vertex 5: the last vertex repeats the first; the loop closes by itself: "
+     "remove the last vertex"},
+    {"closing_vertex_with_arc", UTW_E_OUTLINE, 0, 0, 3,
+     "part 1, outline, vertex 4: the last vertex repeats the first; the loop closes by itself: "
+     "move the curve to vertex 1 and remove the last vertex"},
+    {"comma_before_bracket", UTW_E_SYNTAX, -1, -1, -1,
+     "line 2, column 45: a comma stands before the closing ]; remove it"},
+    {"comment", UTW_E_SYNTAX, -1, -1, -1, "line 1, column 19: comments are not allowed"},
+    {"cut_off", UTW_E_SYNTAX, -1, -1, -1,
+     "line 2, column 38: the text ends before its brackets are closed; ] is missing"},
+    {"decimal_comma", UTW_E_SYNTAX, -1, -1, -1, "line 2, column 44: expected a comma or ], not ;"},
+    {"deep", UTW_E_SYNTAX, -1, -1, -1,
+     "line 1, column 33: brackets stand more than 32 deep inside one another"},
+    {"ellipse_axis_zero", UTW_E_OUTLINE, 0, 0, -1,
+     "part 1, outline: the semi-axes of the ellipse are 5 and 0; both must be greater than 0"},
+    {"empty", UTW_E_SYNTAX, -1, -1, -1, "the file is empty; a section file starts with {"},
+    {"hole_circle_radius_zero", UTW_E_OUTLINE, 0, 2, -1,
+     "part 1, hole 2: the radius of the circle is 0; it must be greater than 0"},
+    {"hole_outside", UTW_E_OUTLINE, 0, 1, -1,
+     "part 1, hole 1: it lies outside the outline of its part, near (52, 10); move it inside or "
+     "remove it"},
+    {"holes_not_an_array", UTW_E_SYNTAX, 0, -1, -1,
+     "part 1: \"holes\" must be an array [...], not an object"},
+    {"infinity", UTW_E_SYNTAX, -1, -1, -1,
+     "line 2, column 43: Infinity is not a number; every number must be finite and written out"},
+    {"key_of_other_case", UTW_E_SYNTAX, -1, -1, -1, "unknown key \"Name\"; did you mean \"name\"?"},
+    {"key_twice", UTW_E_SYNTAX, -1, -1, -1, "the key \"units\" is given twice; remove one"},
+    {"load_a_string", UTW_E_SYNTAX, -1, -1, -1,
+     "load 1: \"Vy\" must be a number, not the string \"100 N\"; remove the quotes"},
+    {"load_at_not_a_point", UTW_E_SYNTAX, -1, -1, -1,
+     "load 1: \"at\" must be a point [x, y], not a number"},
+    {"load_at_without_shear", UTW_E_LOAD, -1, -1, -1,
+     "load 1 (\"hook\"): \"at\" is the point where Vx and Vy act, and neither is given; remove "
+     "\"at\""},
+    {"load_key_of_other_case", UTW_E_SYNTAX, -1, -1, -1,
+     "load 1: unknown key \"vy\"; did you mean \"Vy\"?"},
+    {"load_name_twice", UTW_E_LOAD, -1, -1, -1,
+     "load 2 (\"hook\"): load 1 has the same name; rename one"},
+    {"load_unknown_key", UTW_E_SYNTAX, -1, -1, -1,
+     "load 1: unknown key \"Fy\"; did you mean \"Vy\"?"},
+    {"load_without_force", UTW_E_LOAD, -1, -1, -1,
+     "load 1 (\"hook\"): no force or moment is given; give at least one of N, Vx, Vy, T, Mx, My, "
+     "B"},
+    {"load_without_name", UTW_E_LOAD, -1, -1, -1,
+     "load 1: \"name\" is missing; results are reported by it"},
+    {"loads_not_an_array", UTW_E_SYNTAX, -1, -1, -1,
+     "\"loads\" must be an array [...], not an object"},
+    {"loop_crosses_itself", UTW_E_OUTLINE, 0, 0, 3,
+     "part 1, outline: the edge to vertex 4 crosses the edge to vertex 2 near (20, 15); move one "
+     "of them"},
+    {"loop_empty_object", UTW_E_SYNTAX, 0, 0, -1,
+     "part 1, outline: \"outline\" is an empty object; it needs \"circle\" or \"ellipse\""},
+    {"loop_is_a_string", UTW_E_SYNTAX, 0, 0, -1,
+     "part 1, outline: \"outline\" must be an array of vertices, {\"circle\": ...} or "
+     "{\"ellipse\": ...}, not a string"},
+    {"loop_unknown_key", UTW_E_SYNTAX, 0, 0, -1,
+     "part 1, outline: unknown key \"cirle\"; did you mean \"circle\"?"},
+    {"material_E_a_string", UTW_E_SYNTAX, -1, -1, -1,
+     "material \"alloy\": \"E\" must be a number, not the string \"70000 MPa\"; remove the quotes"},
+    {"material_E_zero", UTW_E_MATERIAL, -1, -1, -1,
+     "material \"alloy\": \"E\" is 0; the modulus of elasticity must be greater than 0"},
+    {"material_density_zero", UTW_E_MATERIAL, -1, -1, -1,
+     "material \"alloy\": \"density\" is 0; it must be greater than 0, or left out"},
+    {"material_key_is_a_number", UTW_E_SYNTAX, 0, -1, -1,
+     "part 1: \"material\" must be the name of a material in double quotes, not a number"},
+    {"material_not_defined", UTW_E_MATERIAL, 0, -1, -1,
+     "part 1: the material \"alloy\" is not defined; add it to \"materials\""},
+    {"material_not_used", UTW_E_MATERIAL, -1, -1, -1,
+     "the material \"alloy\" is defined and no part uses it; add \"material\": \"alloy\" to the "
+     "part, or remove it"},
+    {"material_nu_minus_one", UTW_E_MATERIAL, -1, -1, -1,
+     "material \"alloy\": \"nu\" is -1; Poisson's ratio must be greater than -1 and at most 0.5"},
+    {"material_nu_too_large", UTW_E_MATERIAL, -1, -1, -1,
+     "material \"alloy\": \"nu\" is 0.51; Poisson's ratio must be greater than -1 and at most 0.5"},
+    {"material_on_one_part_only", UTW_E_MATERIAL, 1, -1, -1,
+     "part 2: \"material\" is missing, while part 1 has one; give every part its material"},
+    {"material_twice", UTW_E_MATERIAL, -1, -1, -1,
+     "material \"alloy\": is defined twice; remove or rename one"},
+    {"material_unknown_key", UTW_E_SYNTAX, -1, -1, -1,
+     "material \"alloy\": unknown key \"G\"; known here: E, nu, density, yield"},
+    {"material_without_E", UTW_E_MATERIAL, -1, -1, -1,
+     "material \"alloy\": \"E\" is missing; give the modulus of elasticity"},
+    {"material_without_name", UTW_E_MATERIAL, -1, -1, -1, "material \"\": a material needs a name"},
+    {"material_without_nu", UTW_E_MATERIAL, -1, -1, -1,
+     "material \"alloy\": \"nu\" is missing; give Poisson's ratio, such as 0.3"},
+    {"material_yield_negative", UTW_E_MATERIAL, -1, -1, -1,
+     "material \"alloy\": \"yield\" is -250; it must be greater than 0, or left out"},
+    {"materials_an_array", UTW_E_SYNTAX, -1, -1, -1,
+     "\"materials\" must be an object {\"name\": {\"E\": ..., \"nu\": ...}}, not an array"},
+    {"name_is_a_number", UTW_E_SYNTAX, -1, -1, -1,
+     "\"name\" must be a text in double quotes, not a number"},
+    {"name_too_long", UTW_E_SYNTAX, -1, -1, -1,
+     "\"name\" is 201 bytes long; at most 200 are allowed"},
+    {"name_with_line_break", UTW_E_SYNTAX, -1, -1, -1,
+     "\"name\" holds a line break or another control character; remove it"},
+    {"nan", UTW_E_SYNTAX, -1, -1, -1,
+     "line 2, column 42: NaN is not a number; every number must be finite and written out"},
+    {"no_parts", UTW_E_OUTLINE, -1, -1, -1, "\"parts\" is missing; the section has no outline"},
+    {"no_units", UTW_E_SYNTAX, -1, -1, -1,
+     "\"units\" is missing; add, for example, \"units\": \"mm N\""},
+    {"no_vertices", UTW_E_OUTLINE, 0, 0, -1,
+     "part 1, outline: the loop has no vertices; at least three are needed"},
+    {"not_an_object", UTW_E_SYNTAX, -1, -1, -1,
+     "the section must be an object {...}, not an array"},
+    {"not_utf8", UTW_E_SYNTAX, -1, -1, -1,
+     "line 1, column 13: this is not UTF-8 text; save the file as UTF-8"},
+    {"nul", UTW_E_SYNTAX, -1, -1, -1,
+     "line 1, column 18: the text holds a NUL byte; this is not a section file"},
+    {"number_too_large", UTW_E_SYNTAX, 0, 0, 2,
+     "part 1, outline, vertex 3: x of the vertex is a number too large to be held (beyond "
+     "1.8e308)"},
+    {"one_vertex", UTW_E_OUTLINE, 0, 0, -1,
+     "part 1, outline: the loop has one vertex; at least three are needed; for a circle write "
+     "{\"circle\": [xc, yc, r]}"},
+    {"part_not_an_object", UTW_E_SYNTAX, 0, -1, -1,
+     "part 1: the part must be an object {...}, not an array"},
+    {"part_unknown_key", UTW_E_SYNTAX, 0, -1, -1,
+     "part 1: unknown key \"outlin\"; did you mean \"outline\"?"},
+    {"part_without_outline", UTW_E_OUTLINE, 0, -1, -1,
+     "part 1: \"outline\" is missing; give the vertices of the outer loop"},
+    {"parts_empty", UTW_E_OUTLINE, -1, -1, -1, "\"parts\" is empty; give at least one part"},
+    {"parts_not_an_array", UTW_E_SYNTAX, -1, -1, -1,
+     "\"parts\" must be an array [...], not an object"},
+    {"parts_overlap", UTW_E_OUTLINE, 1, 0, 1,
+     "parts 1 and 2 overlap: the edge to vertex 2 of part 2 crosses the edge to vertex 3 of part 1 "
+     "near (40, 10); cut one out of the other"},
+    {"round_does_not_fit", UTW_E_OUTLINE, 0, 0, 2,
+     "part 1, outline, vertex 3: \"round\": 31 does not fit between its two edges; the greatest "
+     "that fits is 30"},
+    {"round_without_corner", UTW_E_OUTLINE, 0, 0, 1,
+     "part 1, outline, vertex 2: \"round\" has no corner to work on: the outline runs straight on "
+     "through this vertex; leave it out"},
+    {"round_zero", UTW_E_OUTLINE, 0, 0, 2,
+     "part 1, outline, vertex 3: \"round\" is 0; it must be greater than 0, or left out"},
+    {"rounds_do_not_fit", UTW_E_OUTLINE, 0, 0, 3,
+     "part 1, outline, vertex 4: \"round\": 20 does not fit beside \"round\": 25 of vertex 3: the "
+     "edge between them is 40 long; the greatest that fits here is 15, or there 20"},
+    {"same_vertex_twice", UTW_E_OUTLINE, 0, 0, 2,
+     "part 1, outline, vertex 3: (40, 0) is the same point as vertex 2; remove one of them"},
+    {"shape_unknown", UTW_E_SYNTAX, -1, -1, -1,
+     "unknown key \"shape\"; known here: name, units, materials, parts, loads"},
+    {"through_empty", UTW_E_SYNTAX, 0, 0, 2,
+     "part 1, outline, vertex 3: \"through\" is empty; list the points between the two vertices, "
+     "or leave it out"},
+    {"through_same_point", UTW_E_OUTLINE, 0, 0, 2,
+     "part 1, outline, vertex 3: points 1 and 2 of \"through\" are the same, (45, 12); remove one"},
+    {"trailing_text", UTW_E_SYNTAX, -1, -1, -1,
+     "line 3, column 1: text follows the end of the section; remove it"},
+    {"two_vertices", UTW_E_OUTLINE, 0, 0, -1,
+     "part 1, outline: the loop has 2 vertices; at least three are needed, or two when one of the "
+     "edges is curved"},
+    {"units_are_a_number", UTW_E_SYNTAX, -1, -1, -1,
+     "\"units\" must be a text in double quotes, not a number"},
+    {"units_turned_round", UTW_E_SYNTAX, -1, -1, -1,
+     "\"units\" is \"N mm\"; the length comes first: \"mm N\""},
+    {"unknown_key", UTW_E_SYNTAX, -1, -1, -1, "unknown key \"laods\"; did you mean \"loads\"?"},
+    {"unknown_key_far", UTW_E_SYNTAX, -1, -1, -1,
+     "unknown key \"comment\"; known here: name, units, materials, parts, loads"},
+    {"unknown_units", UTW_E_SYNTAX, -1, -1, -1,
+     "\"units\" is \"mm kgf\"; it must be a length (mm, cm, m, in, ft), a blank and a force (N, "
+     "kN, MN, lbf, kip), such as \"mm N\""},
+    {"vertex_is_a_number", UTW_E_SYNTAX, 0, 0, 0,
+     "part 1, outline, vertex 1: a vertex must be a point [x, y] or an object {\"at\": [x, y], "
+     "...}, not a number"},
+    {"vertex_key_twice", UTW_E_SYNTAX, 0, 0, 2,
+     "part 1, outline, vertex 3: the key \"at\" is given twice; remove one"},
+    {"vertex_null", UTW_E_SYNTAX, 0, 0, 2,
+     "part 1, outline, vertex 3: x of the vertex must be a number, not null"},
+    {"vertex_radius", UTW_E_SYNTAX, 0, 0, 2,
+     "part 1, outline, vertex 3: unknown key \"radius\"; known here: at, round, chamfer, arc, "
+     "bulge, bezier, through"},
+    {"vertex_round_and_chamfer", UTW_E_SYNTAX, 0, 0, 2,
+     "part 1, outline, vertex 3: a corner is rounded or cut, not both; keep one of \"round\", "
+     "\"chamfer\""},
+    {"vertex_three_numbers", UTW_E_SYNTAX, 0, 0, 1,
+     "part 1, outline, vertex 2: the vertex must be a point [x, y]; it has 3 members"},
+    {"vertex_two_edges", UTW_E_SYNTAX, 0, 0, 2,
+     "part 1, outline, vertex 3: the edge to this vertex is given in two ways; keep one of "
+     "\"arc\", \"bulge\", \"bezier\", \"through\""},
+    {"vertex_unknown_key", UTW_E_SYNTAX, 0, 0, 2,
+     "part 1, outline, vertex 3: unknown key \"rond\"; did you mean \"round\"?"},
+    {"vertex_without_at", UTW_E_SYNTAX, 0, 0, 2,
+     "part 1, outline, vertex 3: \"at\" is missing; give the point [x, y] of the vertex"},
+};
+enum { N_ROW = sizeof row / sizeof row[0] };
+
+static void each_file_is_refused_with_its_message(void **state)
+{
+    (void)state;
+    for (int i = 0; i < N_ROW; i++) {
+        char path[80], message[700];
+        utw_outline *outline = NULL;
+        utw_error err;
+        snprintf(path, sizeof path, "%s.json", row[i].name);
+        snprintf(message, sizeof message, "%s: %s", path, row[i].message);
+        const utw_status st = utw_outline_read(path, &outline, &err);
+        if (st == UTW_OK) print_error("%s is accepted\n", path);
+        assert_int_equal(st, row[i].status);
+        assert_string_equal(err.text, message);
+        assert_int_equal(err.status, row[i].status);
+        assert_int_equal(err.part, row[i].part);
+        assert_int_equal(err.loop, row[i].loop);
+        assert_int_equal(err.vertex, row[i].vertex);
+        assert_null(outline);
+    }
+}
+
+static void no_file_is_left_out(void **state)
+{
+    (void)state;
+    DIR *folder = opendir(".");
+    assert_non_null(folder);
+    int n = 0;
+    for (const struct dirent *entry; (entry = readdir(folder)) != NULL;)
+        n += strstr(entry->d_name, ".json") != NULL;
+    closedir(folder);
+    assert_int_equal(n, N_ROW);
+}
+
+int main(void)
+{
+    const struct CMUnitTest tests[] = {
+        balanced_test(each_file_is_refused_with_its_message),
+        cmocka_unit_test(no_file_is_left_out),
+    };
+    if (chdir(UTW_SOURCE_DIR "/tests/bad") != 0) return 1;
+    return cmocka_run_group_tests(tests, NULL, NULL);
+}
