@@ -2,7 +2,6 @@
  * Points, derivatives and measures of lines, arcs and cubics. */
 #include "outline/curve.h"
 
-
 #include "base/gauss.h"
 #include "base/vec2.h"
 
@@ -20,8 +19,8 @@ utw_curve utw_curve_line(const double from[2], const double to[2])
     return c;
 }
 
-utw_curve utw_curve_arc(const double centre[2], double r, double a0, double a1, const double from[2],
-                        const double to[2])
+utw_curve utw_curve_arc(const double centre[2], double r, double a0, double a1,
+                        const double from[2], const double to[2])
 {
     utw_curve c = {.kind = UTW_ARC, .u = {r, 0}, .v = {0, r}, .a0 = a0, .a1 = a1};
     copy2(c.centre, centre);
@@ -38,7 +37,8 @@ int utw_curve_arc_through(const double from[2], const double mid[2], const doubl
     const double e[2] = {to[0] - from[0], to[1] - from[1]};
     const double cross = utw_cross(m, e), mm = utw_dot(m, m), ee = utw_dot(e, e);
     if (!(fabs(cross) > 1e-12 * fmax(mm, ee))) return -1;
-    const double c[2] = {(e[1] * mm - m[1] * ee) / (2 * cross), (m[0] * ee - e[0] * mm) / (2 * cross)};
+    const double c[2] = {(e[1] * mm - m[1] * ee) / (2 * cross),
+                         (m[0] * ee - e[0] * mm) / (2 * cross)};
     const double r = utw_norm(c), centre[2] = {from[0] + c[0], from[1] + c[1]};
     const double a0 = atan2(-c[1], -c[0]);
     double a1 = atan2(e[1] - c[1], e[0] - c[0]);
@@ -60,12 +60,22 @@ utw_curve utw_curve_cubic(const double from[2], const double c1[2], const double
     return c;
 }
 
-/* cos and sin of an arc's angle at t; unused by the other kinds. */
-static void arc_angle(const utw_curve *c, double t, double cs[2])
+/* Chord from the first end of an arc to its point at t: cos a - cos a0 and sin a - sin a0 as
+ * products, which keep all digits of a short arc of a very large radius. */
+static void arc_chord(const utw_curve *c, double t, double chord[2])
 {
-    const double a = c->a0 + t * (c->a1 - c->a0);
-    cs[0] = cos(a);
-    cs[1] = sin(a);
+    const double half = 0.5 * t * (c->a1 - c->a0), middle = c->a0 + half, s = 2 * sin(half);
+    const double cs = s * cos(middle), sn = s * sin(middle);
+    for (int k = 0; k < 2; k++) chord[k] = c->v[k] * cs - c->u[k] * sn;
+}
+
+/* What is missing between the end of an arc and the end it shall have: rounding, or the width of a
+ * join. It is spread evenly along the arc, so that the arc runs into its ends without a step. */
+static void arc_gap(const utw_curve *c, double gap[2])
+{
+    double whole[2];
+    arc_chord(c, 1, whole);
+    for (int k = 0; k < 2; k++) gap[k] = (c->to[k] - c->from[k]) - whole[k];
 }
 
 void utw_curve_point(const utw_curve *c, double t, double xy[2])
@@ -75,9 +85,10 @@ void utw_curve_point(const utw_curve *c, double t, double xy[2])
     } else if (c->kind == UTW_LINE) {
         for (int k = 0; k < 2; k++) xy[k] = c->from[k] + t * (c->to[k] - c->from[k]);
     } else if (c->kind == UTW_ARC) {
-        double cs[2];
-        arc_angle(c, t, cs);
-        for (int k = 0; k < 2; k++) xy[k] = c->centre[k] + c->u[k] * cs[0] + c->v[k] * cs[1];
+        double chord[2], gap[2];
+        arc_chord(c, t, chord);
+        arc_gap(c, gap);
+        for (int k = 0; k < 2; k++) xy[k] = c->from[k] + chord[k] + t * gap[k];
     } else {
         const double s = 1 - t;
         const double b0 = s * s * s, b1 = 3 * s * s * t, b2 = 3 * s * t * t, b3 = t * t * t;
@@ -91,10 +102,10 @@ void utw_curve_d1(const utw_curve *c, double t, double d[2])
     if (c->kind == UTW_LINE) {
         for (int k = 0; k < 2; k++) d[k] = c->to[k] - c->from[k];
     } else if (c->kind == UTW_ARC) {
-        const double span = c->a1 - c->a0;
-        double cs[2];
-        arc_angle(c, t, cs);
-        for (int k = 0; k < 2; k++) d[k] = span * (c->v[k] * cs[0] - c->u[k] * cs[1]);
+        const double span = c->a1 - c->a0, a = c->a0 + t * span, cs = cos(a), sn = sin(a);
+        double gap[2];
+        arc_gap(c, gap);
+        for (int k = 0; k < 2; k++) d[k] = span * (c->v[k] * cs - c->u[k] * sn) + gap[k];
     } else {
         const double s = 1 - t;
         for (int k = 0; k < 2; k++)
@@ -108,10 +119,8 @@ void utw_curve_d2(const utw_curve *c, double t, double d[2])
     if (c->kind == UTW_LINE) {
         d[0] = d[1] = 0;
     } else if (c->kind == UTW_ARC) {
-        const double span = c->a1 - c->a0;
-        double cs[2];
-        arc_angle(c, t, cs);
-        for (int k = 0; k < 2; k++) d[k] = -span * span * (c->u[k] * cs[0] + c->v[k] * cs[1]);
+        const double span = c->a1 - c->a0, a = c->a0 + t * span, cs = cos(a), sn = sin(a);
+        for (int k = 0; k < 2; k++) d[k] = -span * span * (c->u[k] * cs + c->v[k] * sn);
     } else {
         for (int k = 0; k < 2; k++)
             d[k] = 6 * ((1 - t) * (c->c2[k] - 2 * c->c1[k] + c->from[k]) +

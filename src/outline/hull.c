@@ -14,7 +14,7 @@ static void add(utw_hull *h, double x, double y)
 static void add_arc(utw_hull *h, const utw_curve *c)
 {
     const double span = c->a1 - c->a0;
-    const double half = 0.5 * span * (h->t1 - h->t0), middle = c->a0 + 0.5 * span * (h->t0 + h->t1);
+    const double half = 0.5 * span * (h->t1 - h->t0), start = c->a0 + span * h->t0;
     if (fabs(half) > 0.2500001 * UTW_PI) {
         h->n = 0;
         for (int k = 0; k < 4; k++) {
@@ -24,9 +24,10 @@ static void add_arc(utw_hull *h, const utw_curve *c)
         }
         return;
     }
-    /* the end tangents of a circle meet at radius r / cos(half); affine images keep that */
-    const double cs = cos(middle) / cos(half), sn = sin(middle) / cos(half);
-    add(h, c->centre[0] + c->u[0] * cs + c->v[0] * sn, c->centre[1] + c->u[1] * cs + c->v[1] * sn);
+    /* the end tangents of a circle meet r tan(half) from either end; affine images keep the ratio
+     */
+    const double cs = tan(half) * cos(start), sn = tan(half) * sin(start);
+    add(h, h->end[0][0] + c->v[0] * cs - c->u[0] * sn, h->end[0][1] + c->v[1] * cs - c->u[1] * sn);
 }
 
 static void measure(utw_hull *h)
