@@ -206,6 +206,96 @@ typedef struct utw_solution_info {
 /** Fill *info. */
 UTW_API void utw_solution_get_info(const utw_solution *solution, utw_solution_info *info);
 
+/* ---- thin-walled theory -------------------------------------------------------------------------- */
+
+/** One wall of a midline: straight, or a circular arc; its thickness changes linearly along it. */
+typedef struct utw_wall {
+    int from, to;  /* indices of its nodes; the direction in which its stations and flows are counted */
+    double t0, t1; /* thickness at `from` and at `to` [L], > 0 */
+    int arc;       /* 0: straight; 1: an arc through `mid` */
+    double mid[2]; /* a point of the arc, best its mid-point [L]; not read when arc is 0. With from = to, or
+                      ends at the same place, it is the point opposite, and the wall is a full circle,
+                      run counter-clockwise. */
+} utw_wall;
+
+/** The thin-walled idealisation of a section: lines with thickness that meet at nodes; open, closed, with
+ *  any number of cells and fins. Different nodes at the same place are not joined: that is a slit. At most
+ *  4096 nodes and walls. */
+typedef struct utw_midline {
+    int n_nodes, n_walls;
+    double (*nodes)[2]; /* [n_nodes] x, y [L] */
+    utw_wall *walls;    /* [n_walls] */
+} utw_midline;
+
+/** What the thin-walled theory says of a midline: area on the midline, no thickness terms in the second
+ *  moments and in Iw. Second moments are about the centroid in the directions of the drawing's axes.
+ *  Sources: docs/theory-thinwall.md (Vlasov 1961; Bredt 1896; Batho 1916). */
+typedef struct utw_thin_constants {
+    double A, length;          /* [L^2], length of all walls [L] */
+    double xc, yc;             /* centroid [L] */
+    double Ixx, Iyy, Ixy;      /* int y^2, x^2, x y dA [L^4] */
+    double I1, I2, angle;      /* principal ones; from x to the axis of I1, in (-pi/2, pi/2] [rad] */
+    double J, J_bredt, J_open; /* J = flows around the cells + sum int t^3/3 ds [L^4] */
+    double Wt;                 /* J / greatest (|q|/t + t), q per G theta': torque / shear at a face [L^3] */
+    double xs, ys;             /* shear centre [L] */
+    double Iw;                 /* warping constant about the shear centre [L^6] */
+    double Iw_secondary;       /* int t^3/12 r_t^2 ds: warping across the walls, not part of Iw [L^6] */
+    double Asx, Asy;           /* shear areas V^2 / int q^2/t ds, load through the shear centre [L^2] */
+    double shear_xy;           /* int qx qy/t ds of unit Vx and unit Vy: what couples them [1/L^2] */
+    int n_cells;               /* independent cells */
+    int n_junctions, n_ends;   /* nodes with three or more walls; nodes with one */
+    int straight;              /* 1: all walls lie on one line. A force across it has no flow: its shear area
+                                  is 0 (both are when the line is slanted); the shear centre is the mean of
+                                  the line weighted with t^3 */
+} utw_thin_constants;
+
+/** An analysed midline. */
+typedef struct utw_thin utw_thin;
+
+/** Analyse a midline. [in] midline, borrowed. [out] *thin, returned owned: utw_thin_free().
+ *  UTW_E_ARGUMENT (NULL, counts), UTW_E_OUTLINE (a wall without length or thickness, an arc that is none,
+ *  walls on one another or crossing without a node, a node on a wall it is not joined to, more than one
+ *  piece; err->vertex is the index of the wall or node), UTW_E_NOMEM, UTW_E_SINGULAR. Messages count walls
+ *  from 1 and give nodes by index, the number that from and to hold. */
+UTW_API UTW_CHECK utw_status utw_thin_solve(const utw_midline *midline, utw_thin **thin, utw_error *err);
+
+/** Free it; NULL is allowed. */
+UTW_API void utw_thin_free(utw_thin *thin);
+
+/** Its constants. Returned borrowed. */
+UTW_API const utw_thin_constants *utw_thin_get(const utw_thin *thin);
+
+/** What acts on the section. Shear forces act through the shear centre, N at the centroid. */
+typedef struct utw_thin_load {
+    double N, Vx, Vy; /* [F] */
+    double Mx, My;    /* about the centroid [F L] */
+    double T;         /* Saint-Venant torque G J theta' [F L] */
+    double Tw;        /* warping torque -E Iw theta''' = -dB/dz [F L] */
+    double B;         /* bimoment int sigma omega dA = E Iw theta'' [F L^2] */
+} utw_thin_load;
+
+/** What is found at a station of a wall. Shear is positive in the direction from `from` to `to`; left and
+ *  right are as seen looking that way, with x to the right and y up. */
+typedef struct utw_thin_station {
+    double x, y;       /* [L] */
+    double tangent[2]; /* unit vector from `from` to `to` [1] */
+    double t;          /* thickness [L] */
+    double omega;      /* sectorial coordinate about the shear centre, mean 0; u_z = theta' omega [L^2] */
+    double q;          /* shear flow of Vx, Vy, of T around the cells, and of Tw [F/L] */
+    double sigma;      /* normal stress of N, Mx, My, B [F/L^2] */
+    double tau;        /* q/t, shear stress on the midline [F/L^2] */
+    double tau_left;   /* tau - T t/J, on the left face [F/L^2] */
+    double tau_right;  /* tau + T t/J, on the right face [F/L^2] */
+} utw_thin_station;
+
+/** Flow and stresses at fraction u (0 .. 1) of a wall's length. [in] load, borrowed.
+ *  UTW_E_ARGUMENT when wall or u is out of range; UTW_E_LOAD when the midline cannot carry the load: a force
+ *  or moment across a straight line of walls, a bimoment or warping torque where Iw = 0, a number that is
+ *  not finite. */
+UTW_API UTW_CHECK utw_status utw_thin_at(const utw_thin *thin, int wall, double u,
+                                         const utw_thin_load *load, utw_thin_station *station,
+                                         utw_error *err);
+
 #ifdef __cplusplus
 }
 #endif
