@@ -83,6 +83,22 @@ UTW_API UTW_CHECK utw_status utw_outline_read(const char *path, utw_outline **ou
 UTW_API UTW_CHECK utw_status utw_outline_parse(const char *text, size_t n, const char *name,
                                                utw_outline **outline, utw_error *err);
 
+/** The same two with named dimensions of the file ("let") given other values. [in] set[n_set], borrowed, each
+ *  "NAME=VALUE" such as "t=5"; the value may be an expression. UTW_E_ARGUMENT when one is not of this form, names
+ *  no dimension of the file, or sets one twice. */
+UTW_API UTW_CHECK utw_status utw_outline_read_with(const char *path, int n_set, const char *const *set,
+                                                   utw_outline **outline, utw_error *err);
+UTW_API UTW_CHECK utw_status utw_outline_parse_with(const char *text, size_t n, const char *name, int n_set,
+                                                    const char *const *set, utw_outline **outline,
+                                                    utw_error *err);
+
+/** The number of named dimensions. */
+UTW_API int utw_outline_dimension_count(const utw_outline *outline);
+
+/** The k-th named dimension: its name, returned borrowed, NULL when k is out of range. [out] *value and
+ *  *is_set (1: set by the caller, 0: by the file); either may be NULL. */
+UTW_API const char *utw_outline_dimension(const utw_outline *outline, int k, double *value, int *is_set);
+
 /** Free an outline; NULL is allowed. */
 UTW_API void utw_outline_free(utw_outline *outline);
 

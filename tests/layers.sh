@@ -32,4 +32,5 @@ foreign 'gmshc?\.h' mesh
 foreign 'cholmod\.h' field
 foreign 'cairo' draw
 foreign 'cjson/' "outline report"
+foreign 'muParser' outline
 exit $bad

@@ -26,6 +26,8 @@ void utw_outline_free(utw_outline *outline)
     for (int i = 0; i < outline->n_part; i++) utw_part_clear(&outline->part[i]);
     for (int i = 0; i < outline->n_material; i++) utw_free(outline->material[i].name);
     for (int i = 0; i < outline->n_load; i++) utw_free(outline->load[i].name);
+    for (int i = 0; i < outline->n_dimension; i++) utw_free(outline->dimension[i].name);
+    utw_free(outline->dimension);
     utw_free(outline->part);
     utw_free(outline->material);
     utw_free(outline->load);
@@ -42,6 +44,20 @@ const char *utw_outline_name(const utw_outline *outline)
 const char *utw_outline_units(const utw_outline *outline)
 {
     return outline->units;
+}
+
+int utw_outline_dimension_count(const utw_outline *outline)
+{
+    return outline->n_dimension;
+}
+
+const char *utw_outline_dimension(const utw_outline *outline, int k, double *value, int *is_set)
+{
+    if (k < 0 || k >= outline->n_dimension) return NULL;
+    const utw_dimension *d = &outline->dimension[k];
+    if (value != NULL) *value = d->value;
+    if (is_set != NULL) *is_set = d->is_set;
+    return d->name;
 }
 
 /* 1/2 int (x dy - y dx) over a curve, about `o`. Lines and arcs in closed form; the integrand of a

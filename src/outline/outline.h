@@ -39,6 +39,13 @@ typedef struct utw_load {
     double at[2]; /* where Vx, Vy act [L] */
 } utw_load;
 
+/** A named dimension of the file ("let"), with the value it had when the file was read. */
+typedef struct utw_dimension {
+    char *name; /* owned */
+    double value;
+    int is_set; /* 1: set by the caller, not by the file */
+} utw_dimension;
+
 struct utw_outline {
     char *name, *units; /* owned */
     char length_unit[8], force_unit[8];
@@ -46,6 +53,8 @@ struct utw_outline {
     utw_part *part;
     utw_material *material;
     utw_load *load;
+    int n_dimension;
+    utw_dimension *dimension; /* [n_dimension], owned */
     double box[4]; /* xmin, ymin, xmax, ymax of all parts [L] */
 };
 

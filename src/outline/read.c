@@ -9,16 +9,19 @@
 #include "base/memory.h"
 #include "outline/check.h"
 
-/* In the order they are read: parts name materials. What stands in place of "parts" (trade shapes,
- * midlines) is one more line here, with its bit in SECTION. */
+/* In the order they are read: expressions name dimensions, parts name materials. What stands in
+ * place of "parts" (trade shapes, midlines) is one more line here, with its bit in SECTION. */
 static const utw_key section_key[] = {
-    {"name", utw_read_text, offsetof(utw_outline, name)},
-    {"units", utw_read_units, 0},
-    {"materials", utw_read_materials, 0},
-    {"parts", utw_read_parts, 0},
-    {"loads", utw_read_loads, 0},
+    {"let", utw_read_let, 0},     {"name", utw_read_text, offsetof(utw_outline, name)},
+    {"units", utw_read_units, 0}, {"materials", utw_read_materials, 0},
+    {"parts", utw_read_parts, 0}, {"loads", utw_read_loads, 0},
 };
-enum { N_KEY = sizeof section_key / sizeof section_key[0], UNITS = 1 << 1, SECTION = 1 << 3 };
+enum {
+    N_KEY = sizeof section_key / sizeof section_key[0],
+    LET = 1 << 0,
+    UNITS = 1 << 2,
+    SECTION = 1 << 4
+};
 
 /* Either every part has a material or none. */
 static utw_status check_materials(utw_reader *r)
@@ -47,6 +50,10 @@ static utw_status read_section(utw_reader *r, const utw_json *json)
     const utw_status st =
         utw_read_object(r, json, "the section", section_key, N_KEY, r->outline, &given);
     if (st != UTW_OK) return st;
+    if (r->n_set > 0 && !(given & LET))
+        return utw_fail(r->err, UTW_E_ARGUMENT,
+                        "\"%.100s\" cannot be set; the section has no named dimensions (\"let\")",
+                        r->set[0]);
     if (!(given & UNITS))
         return utw_fail(r->err, UTW_E_SYNTAX,
                         "\"units\" is missing; add, for example, \"units\": \"mm N\"");
@@ -91,12 +98,14 @@ static void name_place(const utw_reader *r)
     utw_error_place(r->err, r->part, r->loop, r->vertex);
 }
 
-static utw_status parse(const char *text, size_t n, utw_outline **outline, utw_error *err)
+static utw_status parse(const char *text, size_t n, int n_set, const char *const *set,
+                        utw_outline **outline, utw_error *err)
 {
     utw_status st = UTW_E_INTERNAL;
     utw_json *json = NULL;
-    utw_reader r = {.err = err, .part = -1, .loop = -1, .vertex = -1};
+    utw_reader r = {.err = err, .n_set = n_set, .set = set, .part = -1, .loop = -1, .vertex = -1};
     UTW_TRY(utw_json_parse(text, n, &json, err));
+    UTW_TRY(utw_let_create(0, &r.let, err));
     UTW_TRY_ALLOC(r.outline = utw_alloc(1, sizeof *r.outline));
     st = read_section(&r, json);
     if (st != UTW_OK) {
@@ -110,35 +119,52 @@ static utw_status parse(const char *text, size_t n, utw_outline **outline, utw_e
     st = UTW_OK;
 done:
     utw_outline_free(r.outline);
+    utw_let_free(r.let);
     utw_json_free(json);
     return st;
 }
 
-utw_status utw_outline_parse(const char *text, size_t n, const char *name, utw_outline **outline,
-                             utw_error *err)
+utw_status utw_outline_parse_with(const char *text, size_t n, const char *name, int n_set,
+                                  const char *const *set, utw_outline **outline, utw_error *err)
 {
     utw_error local;
-    if (text == NULL || name == NULL || outline == NULL)
-        return utw_fail(err, UTW_E_ARGUMENT,
-                        "utw_outline_parse: text, name and outline must not be NULL");
+    int wrong =
+        text == NULL || name == NULL || outline == NULL || n_set < 0 || (n_set > 0 && set == NULL);
+    for (int i = 0; !wrong && i < n_set; i++) wrong = set[i] == NULL;
+    if (wrong)
+        return utw_fail(
+            err, UTW_E_ARGUMENT,
+            "reading a section: text, name, outline and each of set[n_set] must be given");
     utw_error_clear(&local);
-    const utw_status st = parse(text, n, outline, &local);
+    const utw_status st = parse(text, n, n_set, set, outline, &local);
     if (st == UTW_OK) return UTW_OK;
     utw_error_prefix(&local, "%.200s: ", name);
     if (err != NULL) *err = local;
     return st;
 }
 
-utw_status utw_outline_read(const char *path, utw_outline **outline, utw_error *err)
+utw_status utw_outline_parse(const char *text, size_t n, const char *name, utw_outline **outline,
+                             utw_error *err)
+{
+    return utw_outline_parse_with(text, n, name, 0, NULL, outline, err);
+}
+
+utw_status utw_outline_read_with(const char *path, int n_set, const char *const *set,
+                                 utw_outline **outline, utw_error *err)
 {
     char *text = NULL;
     size_t n = 0;
     if (path == NULL || outline == NULL)
-        return utw_fail(err, UTW_E_ARGUMENT, "utw_outline_read: path and outline must not be NULL");
+        return utw_fail(err, UTW_E_ARGUMENT, "reading a section: path and outline must be given");
     const char *name = strcmp(path, "-") == 0 ? "standard input" : path;
     utw_status st = utw_read_file(path, &text, &n, err);
     if (st != UTW_OK) utw_error_prefix(err, "%.200s: ", name);
-    if (st == UTW_OK) st = utw_outline_parse(text, n, name, outline, err);
+    if (st == UTW_OK) st = utw_outline_parse_with(text, n, name, n_set, set, outline, err);
     utw_free(text);
     return st;
+}
+
+utw_status utw_outline_read(const char *path, utw_outline **outline, utw_error *err)
+{
+    return utw_outline_read_with(path, 0, NULL, outline, err);
 }

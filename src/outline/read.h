@@ -6,20 +6,25 @@
 
 #include "base/status.h"
 #include "outline/json.h"
+#include "outline/let.h"
 #include "outline/outline.h"
 
 #define UTW_LONGEST_NAME 200 /* bytes of a name */
 #define UTW_MOST_MATERIALS                                                                         \
     1000 /* more is a mistake, and would make the search for duplicates slow */
-#define UTW_MOST_LOADS    2000
-#define UTW_MOST_PARTS    2000
-#define UTW_MOST_HOLES    2000   /* of one part */
-#define UTW_MOST_VERTICES 100000 /* of one loop */
+#define UTW_MOST_DIMENSIONS 1000
+#define UTW_MOST_LOADS      2000
+#define UTW_MOST_PARTS      2000
+#define UTW_MOST_HOLES      2000   /* of one part */
+#define UTW_MOST_VERTICES   100000 /* of one loop */
 
 /** The state of a reading. The place is put before a message once, when the reading ends. */
 typedef struct utw_reader {
     utw_error *err; /* borrowed, never NULL */
     utw_outline *outline;
+    utw_let *let; /* named dimensions, perhaps none; for every number given as an expression */
+    int n_set;    /* dimensions set from outside */
+    const char *const *set; /* [n_set], borrowed: "t=5" */
     int part, loop, vertex; /* being read, 0-based; -1: none */
     char subject[96];       /* being read when it is no part, such as `material "6082"`; else "" */
 } utw_reader;
@@ -41,7 +46,8 @@ typedef struct utw_key {
 utw_status utw_read_object(utw_reader *r, const utw_json *object, const char *what,
                            const utw_key *key, int n_key, void *target, unsigned *given);
 
-/** A finite number: double *target. Every number of a section file is read here. */
+/** A finite number, or an expression for one in a string: double *target. Every number of a section
+ * file is read here. */
 utw_status utw_read_number(utw_reader *r, const utw_json *value, const char *what, void *target);
 
 /** An array of least..most numbers. [in] form, such as "[x, y]", for messages; [out] number[most],
@@ -58,6 +64,10 @@ utw_status utw_read_text(utw_reader *r, const utw_json *value, const char *what,
 
 /** Check that a value is an array (object) and, for an array, count it: at most `most`. */
 utw_status utw_read_array(utw_reader *r, const utw_json *value, const char *what, int most, int *n);
+
+/** "let": fills r->let, sets r->set, resolves, and copies the values to the outline. target:
+ * utw_outline. */
+utw_status utw_read_let(utw_reader *r, const utw_json *value, const char *what, void *target);
 
 /** "units": fills outline->units, length_unit, force_unit. target: utw_outline. */
 utw_status utw_read_units(utw_reader *r, const utw_json *value, const char *what, void *target);

@@ -3,6 +3,7 @@
 #include <stdio.h>
 #include <string.h>
 
+#include "base/degrees.h"
 #include "base/memory.h"
 #include "base/vec2.h"
 #include "outline/chain.h"
@@ -186,7 +187,7 @@ static utw_status read_ellipse(utw_reader *r, const utw_json *value, const char 
         return utw_fail(r->err, UTW_E_OUTLINE,
                         "the semi-axes of the ellipse are %g and %g; both must be greater than 0",
                         e[2], e[3]);
-    const double turn = fmod(e[4], 360) * UTW_PI / 180, cs = cos(turn), sn = sin(turn);
+    const double cs = utw_cos_degrees(e[4]), sn = utw_sin_degrees(e[4]);
     utw_curve curve = utw_curve_arc(e, 1, 0, 2 * UTW_PI, e, e);
     curve.u[0] = e[2] * cs, curve.u[1] = e[2] * sn;
     curve.v[0] = -e[3] * sn, curve.v[1] = e[3] * cs;

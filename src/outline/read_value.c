@@ -73,10 +73,11 @@ utw_status utw_read_number(utw_reader *r, const utw_json *value, const char *wha
 {
     double *number = target;
     const utw_json_kind kind = utw_json_kind_of(value);
-    if (kind == UTW_JSON_STRING)
-        return utw_fail(r->err, UTW_E_SYNTAX,
-                        "%s must be a number, not the string \"" SHOWN "\"; remove the quotes",
-                        what, shown(utw_json_string(value)));
+    if (kind == UTW_JSON_STRING) {
+        const utw_status st = utw_let_evaluate(r->let, utw_json_string(value), number, r->err);
+        if (st != UTW_OK) utw_error_prefix(r->err, "%s: ", what);
+        return st;
+    }
     if (kind != UTW_JSON_NUMBER) return wrong_kind(r, value, what, "a number");
     if (!isfinite(utw_json_number(value)))
         return utw_fail(r->err, UTW_E_SYNTAX,

@@ -105,15 +105,96 @@ static void wrong_arguments_are_refused(void **state)
     assert_null(o);
 }
 
-static void memory_may_run_out_anywhere(void **state)
+static const char *const parametric =
+    "{\"units\": \"mm N\", \"let\": {\"t\": 4, \"b\": \"60 - 2*t\", \"E\": 70000},"
+    " \"materials\": {\"alloy\": {\"E\": \"E\", \"nu\": \"1/3\"}},"
+    " \"parts\": [{\"material\": \"alloy\","
+    " \"outline\": [[0,0], [\"b\",0], {\"at\": [\"b\", \"b/2\"], \"round\": \"t/2\"}, [0, "
+    "\"b/2\"]],"
+    " \"holes\": [{\"circle\": [\"b/2\", \"b/4\", \"t\"]}]}],"
+    " \"loads\": [{\"name\": \"pull\", \"N\": \"E/1000\"}]}";
+
+static void numbers_may_be_expressions(void **state)
 {
     (void)state;
+    utw_outline *o = utw_outline_of(parametric);
+    assert_close(o->box[2], 52, 1e-15);
+    assert_close(utw_loop_area(&o->part[0].loop[0]), 52 * 26 - (1 - UTW_PI / 4) * 4, 1e-14);
+    assert_close(utw_loop_area(&o->part[0].loop[1]), -UTW_PI * 16, 1e-14);
+    assert_true(o->material[0].E == 70000 && o->material[0].nu == 1.0 / 3 && o->load[0].N == 70);
+    utw_outline_free(o);
+    o = utw_outline_of(
+        "{\"units\": \"mm N\", \"parts\": [{\"outline\": {\"circle\": [0, 0, \"25.4/2\"]}}]}");
+    assert_close(o->box[2], 12.7, 1e-15);
+    assert_int_equal(utw_outline_dimension_count(o), 0);
+    utw_outline_free(o);
+}
+
+static void dimensions_may_be_set_from_outside(void **state)
+{
+    (void)state;
+    const char *const set[] = {"t=5", "E=2*35500"};
+    utw_outline *o = NULL;
+    utw_error err;
+    assert_ok(utw_outline_parse_with(parametric, strlen(parametric), "test", 2, set, &o, &err));
+    assert_close(o->box[2], 50, 1e-15);
+    assert_true(o->material[0].E == 71000);
+    assert_int_equal(utw_outline_dimension_count(o), 3);
+    double value;
+    int is_set;
+    assert_string_equal(utw_outline_dimension(o, 0, &value, &is_set), "t");
+    assert_true(value == 5 && is_set == 1);
+    assert_string_equal(utw_outline_dimension(o, 1, &value, &is_set), "b");
+    assert_true(value == 50 && is_set == 0);
+    assert_string_equal(utw_outline_dimension(o, 2, NULL, NULL), "E");
+    assert_null(utw_outline_dimension(o, 3, &value, &is_set));
+    assert_null(utw_outline_dimension(o, -1, &value, &is_set));
+    utw_outline_free(o);
+}
+
+static void wrong_settings_are_refused(void **state)
+{
+    (void)state;
+    const struct {
+        const char *text, *set;
+        utw_status status;
+        const char *message;
+    } row[] = {
+        {parametric, "t", UTW_E_ARGUMENT, "test: \"t\" must be NAME=VALUE, such as t=5"},
+        {parametric, "r=5", UTW_E_ARGUMENT,
+         "test: \"r=5\": unknown name \"r\"; define it in \"let\""},
+        {parametric, "t=b", UTW_E_SYNTAX,
+         "test: dimension \"b\": \"60 - 2*t\" needs \"t\", whose own value needs this one; break "
+         "the circle"},
+        {parametric, "t=5 mm", UTW_E_SYNTAX,
+         "test: dimension \"t\": \"5 mm\" is not understood from its character 3 on: \"mm\""},
+        {full, "t=5", UTW_E_ARGUMENT,
+         "test: \"t=5\" cannot be set; the section has no named dimensions (\"let\")"},
+    };
+    for (size_t i = 0; i < sizeof row / sizeof row[0]; i++) {
+        utw_outline *o = NULL;
+        utw_error err;
+        assert_int_equal(utw_outline_parse_with(row[i].text, strlen(row[i].text), "test", 1,
+                                                &row[i].set, &o, &err),
+                         row[i].status);
+        assert_string_equal(err.text, row[i].message);
+    }
+    const char *const none[] = {NULL};
+    utw_outline *o = NULL;
+    assert_int_equal(utw_outline_parse_with(full, strlen(full), "test", 1, none, &o, NULL),
+                     UTW_E_ARGUMENT);
+    assert_int_equal(utw_outline_parse_with(full, strlen(full), "test", 1, NULL, &o, NULL),
+                     UTW_E_ARGUMENT);
+}
+
+static void let_memory_run_out(const char *text)
+{
     utw_outline *o = NULL;
     for (long n = 1; o == NULL; n++) {
         utw_error err;
         const long before = utw_memory_live();
         utw_memory_fail_at(n);
-        const utw_status st = utw_outline_parse(full, strlen(full), "test", &o, &err);
+        const utw_status st = utw_outline_parse(text, strlen(text), "test", &o, &err);
         utw_memory_fail_at(0);
         if (st == UTW_OK) break;
         assert_int_equal(st, UTW_E_NOMEM);
@@ -121,6 +202,13 @@ static void memory_may_run_out_anywhere(void **state)
         assert_int_equal(utw_memory_live(), before);
     }
     utw_outline_free(o);
+}
+
+static void memory_may_run_out_anywhere(void **state)
+{
+    (void)state;
+    let_memory_run_out(full);
+    let_memory_run_out(parametric);
 }
 
 int main(void)
@@ -131,6 +219,9 @@ int main(void)
         balanced_test(the_box_holds_curves_not_only_vertices),
         balanced_test(a_missing_name_is_empty),
         balanced_test(wrong_arguments_are_refused),
+        balanced_test(numbers_may_be_expressions),
+        balanced_test(dimensions_may_be_set_from_outside),
+        balanced_test(wrong_settings_are_refused),
         balanced_test(memory_may_run_out_anywhere),
     };
     return cmocka_run_group_tests(tests, NULL, NULL);
