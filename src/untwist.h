@@ -50,7 +50,8 @@ typedef enum utw_status {
     UTW_E_MESH = 8,          /* no valid mesh could be made */
     UTW_E_SINGULAR = 9,      /* the equations could not be factorised */
     UTW_E_NO_THIN_WALL = 10, /* the section has no thin-walled idealisation */
-    UTW_E_INTERNAL = 11      /* a fault of the library itself */
+    UTW_E_INTERNAL = 11,     /* a fault of the library itself */
+    UTW_E_UNBOUNDED = 12     /* a stress without bound: a sharp re-entrant corner */
 } utw_status;
 
 /** A status with its message and the place it speaks of. Owned by the caller; places are 0-based and -1

@@ -63,6 +63,7 @@ const char *utw_status_text(utw_status status)
     case UTW_E_SINGULAR: return "system of equations is singular";
     case UTW_E_NO_THIN_WALL: return "no thin-walled idealisation";
     case UTW_E_INTERNAL: return "internal error";
+    case UTW_E_UNBOUNDED: return "stress has no bound at a sharp re-entrant corner";
     }
     return "unknown status";
 }

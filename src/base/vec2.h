@@ -6,6 +6,8 @@
 #include <math.h>
 
 #define UTW_PI 3.14159265358979323846
+#define UTW_INFINITY ((double)INFINITY)
+#define UTW_NAN ((double)NAN)
 
 static inline double utw_dot(const double a[2], const double b[2])
 {
