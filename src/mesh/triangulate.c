@@ -1,0 +1,317 @@
+/* SPDX-License-Identifier: GPL-3.0-or-later
+ * Gmsh's triangulation of the chords, and finding the curves again in what it returns. */
+#include "mesh/triangulate.h"
+
+#include <gmshc.h>
+
+#include "base/memory.h"
+#include "base/status.h"
+#include "base/vec2.h"
+
+enum { TRIANGLE_TYPE = 2 }; /* Gmsh's number for three-node triangles */
+
+/* One side of an element on a curve: points a, b of the list below, interval of the division. */
+typedef struct chord {
+    int a, b, edge;
+    double t0, t1;
+} chord;
+
+/* Everything on the boundary, in the order it is given to Gmsh: points 0.. are the net's nodes,
+ * then the inner breakpoints edge by edge; chords edge by edge. Gmsh's tags are one more. */
+typedef struct boundary {
+    const utw_net *net;
+    const utw_division *division;
+    int n_point, n_chord;
+    double (*xy)[2], *size;
+    chord *chord;
+    int *first_chord; /* [n_edge + 1] */
+} boundary;
+
+static void boundary_clear(boundary *b)
+{
+    utw_free(b->xy);
+    utw_free(b->size);
+    utw_free(b->chord);
+    utw_free(b->first_chord);
+}
+
+static utw_status boundary_fill(boundary *b, utw_error *err)
+{
+    utw_status st = UTW_E_INTERNAL;
+    const utw_net *net = b->net;
+    const utw_division *d = b->division;
+    const size_t total = (size_t)(net->n_node + d->first[net->n_edge]);
+    UTW_TRY_ALLOC(b->xy = utw_alloc(total, sizeof *b->xy));
+    UTW_TRY_ALLOC(b->size = utw_alloc(total, sizeof *b->size));
+    UTW_TRY_ALLOC(b->chord = utw_alloc(total, sizeof *b->chord));
+    UTW_TRY_ALLOC(b->first_chord = utw_alloc((size_t)net->n_edge + 1, sizeof(int)));
+    for (; b->n_point < net->n_node; b->n_point++)
+        for (int k = 0; k < 2; k++) b->xy[b->n_point][k] = net->node[b->n_point][k];
+    for (int e = 0; e < net->n_edge; e++) {
+        const double *t = d->t + d->first[e];
+        const int n = d->first[e + 1] - d->first[e] - 1;
+        b->first_chord[e] = b->n_chord;
+        for (int i = 0, last = net->edge[e].from; i < n; i++) {
+            int next = net->edge[e].to;
+            if (i < n - 1) {
+                next = b->n_point++;
+                utw_curve_point(&net->edge[e].curve, t[i + 1], b->xy[next]);
+            }
+            b->chord[b->n_chord++] = (chord){last, next, e, t[i], t[i + 1]};
+            last = next;
+        }
+    }
+    b->first_chord[net->n_edge] = b->n_chord;
+    for (int i = 0; i < b->n_point; i++) b->size[i] = UTW_INFINITY;
+    for (int i = 0; i < b->n_chord;
+         i++) { /* at a point between two sides the size of the shorter one */
+        const chord *c = &b->chord[i];
+        const double length = utw_distance(b->xy[c->a], b->xy[c->b]);
+        b->size[c->a] = fmin(b->size[c->a], length);
+        b->size[c->b] = fmin(b->size[c->b], length);
+    }
+    st = UTW_OK;
+done:
+    return st;
+}
+
+/* ---- talking to Gmsh
+ * ----------------------------------------------------------------------------- */
+
+static utw_status gmsh_failed(utw_error *err, const char *what)
+{
+    return utw_fail(err, UTW_E_MESH,
+                    "the mesher could not %s; check the outline for walls of almost no thickness",
+                    what);
+}
+
+/* Gmsh's curve loop for one loop of the net: its chords in order, signed. Returns the tag, 0 on
+ * failure. */
+static int give_loop(const boundary *b, const utw_net_loop *loop, int *tags, int *ierr)
+{
+    int n = 0;
+    for (int i = 0; i < loop->n; i++) {
+        const int ref = loop->ref[i], e = ref > 0 ? ref - 1 : -ref - 1;
+        const int first = b->first_chord[e], count = b->first_chord[e + 1] - first;
+        for (int k = 0; k < count; k++)
+            tags[n++] = ref > 0 ? first + k + 1 : -(first + count - 1 - k + 1);
+    }
+    return gmshModelGeoAddCurveLoop(tags, (size_t)n, -1, 0, ierr);
+}
+
+static utw_status give_parts(const boundary *b, utw_error *err)
+{
+    utw_status st = UTW_E_INTERNAL;
+    const utw_net *net = b->net;
+    int ierr = 0, *tags = NULL, *loops = NULL;
+    UTW_TRY_ALLOC(tags = utw_alloc((size_t)b->n_chord, sizeof *tags));
+    UTW_TRY_ALLOC(loops = utw_alloc((size_t)net->n_loop, sizeof *loops));
+    for (int l = 0; l < net->n_loop;) {
+        const int part = net->loop[l].part;
+        int n = 0;
+        for (; l < net->n_loop && net->loop[l].part == part; l++) {
+            loops[n++] = give_loop(b, &net->loop[l], tags, &ierr);
+            if (ierr) {
+                st = gmsh_failed(err, "follow a loop");
+                goto done;
+            }
+        }
+        gmshModelGeoAddPlaneSurface(loops, (size_t)n, part + 1, &ierr);
+        if (ierr) {
+            st = gmsh_failed(err, "fill a part");
+            goto done;
+        }
+    }
+    st = UTW_OK;
+done:
+    utw_free(tags);
+    utw_free(loops);
+    return st;
+}
+
+static utw_status generate(const boundary *b, utw_error *err)
+{
+    int ierr = 0;
+    gmshModelAdd("section", &ierr);
+    for (int i = 0; i < b->n_point && !ierr; i++)
+        gmshModelGeoAddPoint(b->xy[i][0], b->xy[i][1], 0, b->size[i], i + 1, &ierr);
+    for (int i = 0; i < b->n_chord && !ierr; i++) {
+        gmshModelGeoAddLine(b->chord[i].a + 1, b->chord[i].b + 1, i + 1, &ierr);
+        if (!ierr) gmshModelGeoMeshSetTransfiniteCurve(i + 1, 2, "Progression", 1, &ierr);
+    }
+    if (ierr) return gmsh_failed(err, "take the boundary");
+    const utw_status st = give_parts(b, err);
+    if (st != UTW_OK) return st;
+    gmshModelGeoSynchronize(&ierr);
+    if (!ierr) gmshModelMeshGenerate(2, &ierr);
+    return ierr ? gmsh_failed(err, "fill the outline with triangles") : UTW_OK;
+}
+
+/* ---- reading the mesh back
+ * ----------------------------------------------------------------------- */
+
+static utw_status read_nodes(utw_mesh *mesh, const boundary *b, int **node_of_tag, size_t *n_tag,
+                             utw_error *err)
+{
+    utw_status st = UTW_E_INTERNAL;
+    size_t *tag = NULL, n = 0, n_xyz = 0, n_par = 0, most = 0;
+    double *xyz = NULL, *par = NULL;
+    int ierr = 0;
+    gmshModelMeshGetNodes(&tag, &n, &xyz, &n_xyz, &par, &n_par, -1, -1, 0, 0, &ierr);
+    if (ierr || n < (size_t)b->n_point) {
+        st = gmsh_failed(err, "fill the outline with triangles");
+        goto done;
+    }
+    for (size_t i = 0; i < n; i++) most = tag[i] > most ? tag[i] : most;
+    UTW_TRY_ALLOC(*node_of_tag = utw_alloc(most + 1, sizeof **node_of_tag));
+    UTW_TRY_ALLOC(mesh->xy = utw_alloc(n, sizeof *mesh->xy));
+    *n_tag = most + 1;
+    mesh->n_node = (int)n;
+    for (size_t i = 0; i < n; i++) {
+        (*node_of_tag)[tag[i]] = (int)i;
+        for (int k = 0; k < 2; k++) mesh->xy[i][k] = xyz[3 * i + (size_t)k];
+    }
+    /* Gmsh lists the nodes of points first, in the order of their tags; make sure, and take our own
+     * coordinates. */
+    for (int i = 0; i < b->n_point; i++) {
+        if (!(utw_distance(mesh->xy[i], b->xy[i]) <= 1e-3 * b->size[i])) {
+            st = utw_fail(err, UTW_E_INTERNAL, "the mesher reordered the boundary points");
+            goto done;
+        }
+        for (int k = 0; k < 2; k++) mesh->xy[i][k] = b->xy[i][k];
+    }
+    st = UTW_OK;
+done:
+    gmshFree(tag);
+    gmshFree(xyz);
+    gmshFree(par);
+    return st;
+}
+
+static utw_status read_part(utw_mesh *mesh, int part, const int *node_of_tag, size_t n_tag,
+                            size_t *capacity, utw_error *err)
+{
+    utw_status st = UTW_E_INTERNAL;
+    size_t *tag = NULL, n = 0, *node = NULL, n_node = 0;
+    int ierr = 0;
+    gmshModelMeshGetElementsByType(TRIANGLE_TYPE, &tag, &n, &node, &n_node, part + 1, 0, 1, &ierr);
+    void *list = mesh->tri;
+    if (ierr || n == 0 || n_node != 3 * n) {
+        st = gmsh_failed(err, "fill a part with triangles");
+        goto done;
+    }
+    if (utw_grow(&list, capacity, (size_t)mesh->n_tri + n, sizeof *mesh->tri) != 0) {
+        st = utw_fail(err, UTW_E_NOMEM, "out of memory (%s)", __func__);
+        goto done;
+    }
+    mesh->tri = list;
+    for (size_t i = 0; i < n; i++) {
+        utw_triangle t = {.part = part, .curve = {-1, -1, -1}};
+        for (int k = 0; k < 3; k++) {
+            if (node[3 * i + (size_t)k] >= n_tag) goto done;
+            t.node[k] = node_of_tag[node[3 * i + (size_t)k]];
+        }
+        if (utw_turn(mesh->xy[t.node[0]], mesh->xy[t.node[1]], mesh->xy[t.node[2]]) < 0) {
+            const int swap = t.node[1];
+            t.node[1] = t.node[2];
+            t.node[2] = swap;
+        }
+        mesh->tri[mesh->n_tri++] = t;
+    }
+    st = UTW_OK;
+done:
+    gmshFree(tag);
+    gmshFree(node);
+    return st;
+}
+
+/* Give each chord to the side of a triangle that joins the same two points. */
+static utw_status find_curves(utw_mesh *mesh, const boundary *b, utw_error *err)
+{
+    utw_status st = UTW_E_INTERNAL;
+    int *first = NULL, *next = NULL;
+    UTW_TRY_ALLOC(first = utw_alloc((size_t)b->n_point, sizeof *first));
+    UTW_TRY_ALLOC(next = utw_alloc((size_t)b->n_chord, sizeof *next));
+    for (int i = 0; i < b->n_point; i++) first[i] = -1;
+    for (int i = 0; i < b->n_chord; i++) {
+        const int lo = b->chord[i].a < b->chord[i].b ? b->chord[i].a : b->chord[i].b;
+        next[i] = first[lo];
+        first[lo] = i;
+    }
+    int found = 0;
+    for (int e = 0; e < mesh->n_edge; e++) {
+        const utw_mesh_edge *edge = &mesh->edge[e];
+        if (edge->node[0] >= b->n_point || edge->node[1] >= b->n_point) continue;
+        for (int i = first[edge->node[0]]; i >= 0; i = next[i]) {
+            const chord *c = &b->chord[i];
+            if (c->a + c->b != edge->node[0] + edge->node[1])
+                continue; /* one end is the same already */
+            for (int side = 0; side < 2 && edge->tri[side] >= 0; side++) {
+                utw_triangle *t = &mesh->tri[edge->tri[side]];
+                const int k = edge->slot[side], forward = t->node[k] == c->a;
+                t->curve[k] = c->edge;
+                t->t[k][0] = forward ? c->t0 : c->t1;
+                t->t[k][1] = forward ? c->t1 : c->t0;
+            }
+            found++;
+        }
+    }
+    if (found != b->n_chord) {
+        st = gmsh_failed(err, "keep the boundary");
+        goto done;
+    }
+    st = UTW_OK;
+done:
+    utw_free(first);
+    utw_free(next);
+    return st;
+}
+
+static utw_status read_mesh(const boundary *b, utw_mesh **mesh, utw_error *err)
+{
+    utw_status st = UTW_E_INTERNAL;
+    int *node_of_tag = NULL;
+    size_t n_tag = 0, capacity = 0;
+    utw_mesh *m;
+    UTW_TRY_ALLOC(m = utw_alloc(1, sizeof *m));
+    m->net = b->net;
+    UTW_TRY(read_nodes(m, b, &node_of_tag, &n_tag, err));
+    for (int p = 0; p < b->net->n_part; p++)
+        UTW_TRY(read_part(m, p, node_of_tag, n_tag, &capacity, err));
+    UTW_TRY(utw_mesh_connect(m, err));
+    UTW_TRY(find_curves(m, b, err));
+    *mesh = m;
+    m = NULL;
+    st = UTW_OK;
+done:
+    utw_free(node_of_tag);
+    utw_mesh_free(m);
+    return st;
+}
+
+utw_status utw_mesh_triangulate(const utw_net *net, const utw_division *division, utw_mesh **mesh,
+                                utw_error *err)
+{
+    utw_status st = UTW_E_INTERNAL;
+    int ierr = 0, started = 0;
+    boundary b = {.net = net, .division = division};
+    UTW_TRY(boundary_fill(&b, err));
+    gmshInitialize(0, NULL, 0, &ierr);
+    if (ierr) {
+        st = gmsh_failed(err, "start");
+        goto done;
+    }
+    started = 1;
+    gmshOptionSetNumber("General.Terminal", 0, &ierr);
+    gmshOptionSetNumber("General.AbortOnError", 0, &ierr);
+    gmshOptionSetNumber("General.Verbosity", 0, &ierr);
+    gmshOptionSetNumber("Mesh.Algorithm", 6, &ierr); /* frontal-Delaunay */
+    gmshOptionSetNumber("Mesh.MaxNumThreads2D", 1, &ierr);
+    UTW_TRY(generate(&b, err));
+    UTW_TRY(read_mesh(&b, mesh, err));
+    st = UTW_OK;
+done:
+    if (started) gmshFinalize(&ierr);
+    boundary_clear(&b);
+    return st;
+}
