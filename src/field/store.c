@@ -1,0 +1,162 @@
+/* SPDX-License-Identifier: GPL-3.0-or-later
+ * Tables of the shape functions at quadrature points and the matrices of straight-sided elements.
+ */
+#include "base/gauss.h"
+#include "base/memory.h"
+#include "base/status.h"
+#include "field/basis.h"
+
+struct utw_basis_store {
+    utw_table *table[UTW_POINTS_MAX + 1];
+    utw_reference *reference[UTW_ORDER_MAX + 1];
+};
+
+static void table_free(utw_table *t)
+{
+    if (t == NULL) return;
+    utw_free(t->r);
+    utw_free(t->s);
+    utw_free(t->w);
+    utw_free(t->N);
+    utw_free(t->Nr);
+    utw_free(t->Ns);
+    utw_free(t);
+}
+
+static void reference_free(utw_reference *f)
+{
+    if (f == NULL) return;
+    utw_free(f->R11);
+    utw_free(f->R12);
+    utw_free(f->R22);
+    utw_free(f->Mr);
+    utw_free(f->Ms);
+    utw_free(f->M0);
+    utw_free(f);
+}
+
+utw_status utw_basis_store_create(utw_basis_store **store, utw_error *err)
+{
+    utw_basis_store *s = utw_alloc(1, sizeof *s);
+    if (s == NULL) return utw_fail(err, UTW_E_NOMEM, "out of memory (%s)", __func__);
+    *store = s;
+    return UTW_OK;
+}
+
+void utw_basis_store_free(utw_basis_store *store)
+{
+    if (store == NULL) return;
+    for (int q = 0; q <= UTW_POINTS_MAX; q++) table_free(store->table[q]);
+    for (int p = 0; p <= UTW_ORDER_MAX; p++) reference_free(store->reference[p]);
+    utw_free(store);
+}
+
+static utw_table *table_create(int q)
+{
+    utw_table *t = utw_alloc(1, sizeof *t);
+    if (t == NULL) return NULL;
+    t->q = q;
+    t->order = q - 1 < 1 ? 1 : q - 1 > UTW_ORDER_MAX ? UTW_ORDER_MAX : q - 1;
+    t->n_point = q * q;
+    t->n_function = utw_n_functions(t->order);
+    const size_t points = (size_t)t->n_point, all = points * (size_t)t->n_function;
+    t->r = utw_alloc(points, sizeof(double));
+    t->s = utw_alloc(points, sizeof(double));
+    t->w = utw_alloc(points, sizeof(double));
+    t->N = utw_alloc(all, sizeof(double));
+    t->Nr = utw_alloc(all, sizeof(double));
+    t->Ns = utw_alloc(all, sizeof(double));
+    if (!t->r || !t->s || !t->w || !t->N || !t->Nr || !t->Ns) {
+        table_free(t);
+        return NULL;
+    }
+    double x[UTW_GAUSS_MAX], w[UTW_GAUSS_MAX];
+    utw_gauss(q, x, w);
+    for (int j = 0; j < q; j++)
+        for (int i = 0; i < q; i++) { /* the square collapsed onto the triangle, Jacobian 1 - s */
+            const int k = j * q + i;
+            const size_t row = (size_t)k * (size_t)t->n_function;
+            t->s[k] = x[j];
+            t->r[k] = x[i] * (1 - x[j]);
+            t->w[k] = w[i] * w[j] * (1 - x[j]);
+            utw_basis(t->order, t->r[k], t->s[k], t->N + row, t->Nr + row, t->Ns + row);
+        }
+    return t;
+}
+
+const utw_table *utw_basis_table(utw_basis_store *store, int q)
+{
+    if (store->table[q] == NULL) store->table[q] = table_create(q);
+    return store->table[q];
+}
+
+/* The six quadratic Lagrange functions. */
+static void quadratic(double r, double s, double L[6])
+{
+    const double l0 = 1 - r - s;
+    L[0] = l0 * (2 * l0 - 1);
+    L[1] = r * (2 * r - 1);
+    L[2] = s * (2 * s - 1);
+    L[3] = 4 * l0 * r;
+    L[4] = 4 * r * s;
+    L[5] = 4 * s * l0;
+}
+
+/* Degree of the integrands: 2(p-1) for R, p+2 for M0: p+1 points a direction do for p >= 2, three
+ * for p = 1. */
+static void reference_fill(utw_reference *f, const utw_table *t)
+{
+    const int n = f->n;
+    for (int k = 0; k < t->n_point; k++) {
+        double N[UTW_FUNCTIONS_MAX], Nr[UTW_FUNCTIONS_MAX], Ns[UTW_FUNCTIONS_MAX], L[6];
+        utw_basis(f->p, t->r[k], t->s[k], N, Nr, Ns);
+        quadratic(t->r[k], t->s[k], L);
+        for (int a = 0; a < n; a++) {
+            const double wr = t->w[k] * Nr[a], ws = t->w[k] * Ns[a];
+            double *R11 = f->R11 + a * n, *R12 = f->R12 + a * n, *R22 = f->R22 + a * n;
+            for (int b = 0; b <= a; b++) {
+                R11[b] += wr * Nr[b];
+                R12[b] += wr * Ns[b] + ws * Nr[b];
+                R22[b] += ws * Ns[b];
+            }
+            for (int j = 0; j < 6; j++) {
+                f->Mr[j * n + a] += wr * L[j];
+                f->Ms[j * n + a] += ws * L[j];
+                f->M0[j * n + a] += t->w[k] * N[a] * L[j];
+            }
+        }
+    }
+    for (int a = 0; a < n; a++)
+        for (int b = 0; b < a; b++) {
+            f->R11[b * n + a] = f->R11[a * n + b];
+            f->R12[b * n + a] = f->R12[a * n + b];
+            f->R22[b * n + a] = f->R22[a * n + b];
+        }
+}
+
+const utw_reference *utw_basis_reference(utw_basis_store *store, int p)
+{
+    if (store->reference[p] != NULL) return store->reference[p];
+    const utw_table *t = utw_basis_table(store, p + 1 < 3 ? 3 : p + 1);
+    utw_reference *f = utw_alloc(1, sizeof *f);
+    if (t == NULL || f == NULL) {
+        utw_free(f);
+        return NULL;
+    }
+    f->p = p;
+    f->n = utw_n_functions(p);
+    const size_t n = (size_t)f->n;
+    f->R11 = utw_alloc(n * n, sizeof(double));
+    f->R12 = utw_alloc(n * n, sizeof(double));
+    f->R22 = utw_alloc(n * n, sizeof(double));
+    f->Mr = utw_alloc(6 * n, sizeof(double));
+    f->Ms = utw_alloc(6 * n, sizeof(double));
+    f->M0 = utw_alloc(6 * n, sizeof(double));
+    if (!f->R11 || !f->R12 || !f->R22 || !f->Mr || !f->Ms || !f->M0) {
+        reference_free(f);
+        return NULL;
+    }
+    reference_fill(f, t);
+    store->reference[p] = f;
+    return f;
+}
