@@ -1,0 +1,329 @@
+/* SPDX-License-Identifier: GPL-3.0-or-later
+ * The loop of solving, measuring and choosing orders. */
+#include "section/adapt.h"
+
+#include <math.h>
+#include <string.h>
+
+#include "base/clock.h"
+#include "base/memory.h"
+#include "base/status.h"
+#include "mesh/blend.h"
+#include "mesh/layers.h"
+
+/* An order more multiplies an element's share of the gap by about this (measured on five profiles).
+ */
+#define DECAY 0.15
+enum {
+    LARGEST_STEP = 3, /* orders added at once */
+    SPLIT_ORDER = 10  /* an element of this order that still dominates is cut in four */
+};
+
+void utw_solved_clear(utw_solved *s)
+{
+    utw_field_free(s->field);
+    utw_lift_free(s->lift);
+    utw_rim_free(s->rim);
+    utw_mesh_free(s->mesh);
+    utw_net_free(s->net);
+    utw_basis_store_free(s->store);
+    utw_free(s->conductivity);
+    utw_free(s->peak);
+    memset(s, 0, sizeof *s);
+}
+
+/* J is int |stress|^2 of the torsion pair at the upper end of its bracket. */
+static double relative_gap(const utw_measures *m)
+{
+    const double high = m->stress[UTW_TORSION][UTW_TORSION], gap = m->gap[UTW_TORSION][UTW_TORSION];
+    return gap / (high - 0.5 * gap);
+}
+
+/* The value each pair's gap is held against. The anticlastic pairs enter the shear flexibility with
+ * the square of nu/(2(1+nu)) <= 1/6. */
+static void scales(const utw_measures *m, double scale[UTW_N_PAIR])
+{
+    scale[UTW_TORSION] =
+        m->stress[UTW_TORSION][UTW_TORSION] - 0.5 * m->gap[UTW_TORSION][UTW_TORSION];
+    scale[UTW_SHEAR_X] = m->energy[UTW_SHEAR_X][UTW_SHEAR_X];
+    scale[UTW_SHEAR_Y] = m->energy[UTW_SHEAR_Y][UTW_SHEAR_Y];
+    scale[UTW_ANTI_X] = 36 * scale[UTW_SHEAR_X];
+    scale[UTW_ANTI_Y] = 36 * scale[UTW_SHEAR_Y];
+}
+
+typedef struct loop {
+    const utw_options *options;
+    utw_solved *s;
+    int pairs; /* pairs whose gap is refined: the first so many */
+    unsigned char *order;
+    double *share; /* [n_tri][UTW_N_PAIR] */
+} loop;
+
+/* Greatest relative gap over the pairs that count. */
+static double worst_gap(const loop *l)
+{
+    double scale[UTW_N_PAIR], worst = 0;
+    scales(&l->s->now, scale);
+    for (int i = 0; i < l->pairs; i++) worst = fmax(worst, l->s->now.gap[i][i] / scale[i]);
+    return worst;
+}
+
+static utw_status renew_mesh_data(loop *l, utw_error *err)
+{
+    utw_status st = UTW_E_INTERNAL;
+    utw_solved *s = l->s;
+    utw_rim_free(s->rim);
+    utw_lift_free(s->lift);
+    s->rim = NULL;
+    s->lift = NULL;
+    utw_free(l->share);
+    utw_free(s->peak);
+    l->share = s->peak = NULL;
+    UTW_TRY(utw_rim_create(s->mesh, &s->rim, err));
+    UTW_TRY(utw_lift_create(s->mesh, s->rim, UTW_N_PAIR, s->pair, &s->lift, err));
+    UTW_TRY_ALLOC(l->share = utw_alloc((size_t)s->mesh->n_tri * UTW_N_PAIR, sizeof(double)));
+    UTW_TRY_ALLOC(s->peak = utw_alloc((size_t)s->mesh->n_tri, sizeof(double)));
+    st = UTW_OK;
+done:
+    return st;
+}
+
+static utw_status solve_once(loop *l, utw_error *err)
+{
+    utw_solved *s = l->s;
+    const utw_setting set = {s->mesh,         s->rim,     s->lift, s->store,
+                             s->conductivity, UTW_N_PAIR, s->pair};
+    utw_field *field = NULL;
+    utw_status st = utw_field_solve(&set, l->order, &field, err);
+    if (st != UTW_OK) return st;
+    utw_field_free(s->field);
+    s->field = field;
+    s->before = s->now;
+    st = utw_field_measure(field, &s->now, l->share, s->peak, err);
+    if (st != UTW_OK) return st;
+    s->rounds++;
+    s->gap = relative_gap(&s->now);
+    s->reached = s->gap <= l->options->tolerance;
+    return UTW_OK;
+}
+
+/* A finer mesh in the making. */
+typedef struct finer {
+    utw_mesh *mesh;
+    unsigned char *order;
+} finer;
+
+/* Orders of the children after a cut: those of their parents. */
+static utw_status inherit(finer *f, utw_error *err)
+{
+    unsigned char *order = utw_alloc((size_t)f->mesh->n_tri, 1);
+    if (order == NULL) return utw_fail(err, UTW_E_NOMEM, "out of memory (%s)", __func__);
+    for (int t = 0; t < f->mesh->n_tri; t++) order[t] = f->order[f->mesh->tri[t].from];
+    utw_free(f->order);
+    f->order = order;
+    return UTW_OK;
+}
+
+/* A triangle bent more than this is cut from the middle of its curved sides only: other children
+ * would fold. */
+#define BENT 0.7
+
+static double straightness(const utw_mesh *mesh, int t)
+{
+    utw_blend blend;
+    utw_blend_of(mesh, &mesh->tri[t], &blend);
+    return utw_blend_quality(&blend);
+}
+
+/* Two layers more at the corners of the outline in marked triangles: what is left there is the
+ * corner's own singularity. Nodes with bent triangles around them get none. served[t] is set for
+ * the triangles that are cut by it. */
+static utw_status plan_layers(const utw_mesh *mesh, const unsigned char *wanted, int *layers,
+                              unsigned char *served, utw_error *err)
+{
+    utw_status st = UTW_E_INTERNAL;
+    unsigned char *bent;
+    const int n = mesh->net->n_node;
+    UTW_TRY_ALLOC(bent = utw_alloc((size_t)n, 1));
+    for (int t = 0; t < mesh->n_tri; t++) {
+        const int *node = mesh->tri[t].node;
+        if ((node[0] >= n && node[1] >= n && node[2] >= n) || straightness(mesh, t) >= BENT)
+            continue;
+        for (int k = 0; k < 3; k++)
+            if (node[k] < n) bent[node[k]] = 1;
+    }
+    for (int t = 0; t < mesh->n_tri; t++)
+        for (int k = 0; wanted[t] && k < 3; k++) {
+            const int node = mesh->tri[t].node[k];
+            if (node < n && !bent[node]) layers[node] = served[t] = 2;
+        }
+    st = UTW_OK;
+done:
+    utw_free(bent);
+    return st;
+}
+
+/* Cut marked triangles in four, or across their curved sides; their neighbours follow. */
+static utw_status cut_in_four(finer *f, const unsigned char *wanted, const unsigned char *served,
+                              utw_error *err)
+{
+    utw_status st = UTW_E_INTERNAL;
+    utw_mesh *mesh = f->mesh;
+    unsigned char *marked;
+    int any = 0;
+    UTW_TRY_ALLOC(marked = utw_alloc((size_t)mesh->n_edge, 1));
+    for (int t = 0; t < mesh->n_tri; t++) {
+        if (!wanted[t] || served[t]) continue;
+        const int all = straightness(mesh, t) >= BENT;
+        for (int k = 0; k < 3; k++)
+            if (all || utw_mesh_is_curved(mesh, &mesh->tri[t], k))
+                any = marked[mesh->tri[t].side[k]] = 1;
+    }
+    if (any) {
+        UTW_TRY(utw_mesh_halve(mesh, marked, err));
+        UTW_TRY(inherit(f, err));
+    }
+    st = UTW_OK;
+done:
+    utw_free(marked);
+    return st;
+}
+
+/* Refine the copy of the mesh at marked triangles: corners of the outline get layers, the others
+ * are cut. */
+static utw_status refine_copy(finer *f, const unsigned char *wanted, utw_error *err)
+{
+    utw_status st = UTW_E_INTERNAL;
+    int *layers = NULL;
+    unsigned char *served = NULL;
+    UTW_TRY_ALLOC(layers = utw_alloc((size_t)f->mesh->net->n_node, sizeof *layers));
+    UTW_TRY_ALLOC(served = utw_alloc((size_t)f->mesh->n_tri, 1));
+    UTW_TRY(plan_layers(f->mesh, wanted, layers, served, err));
+    UTW_TRY(cut_in_four(f, wanted, served, err));
+    UTW_TRY(utw_mesh_cut_layers(f->mesh, layers, err));
+    UTW_TRY(inherit(f, err));
+    st = UTW_OK;
+done:
+    utw_free(layers);
+    utw_free(served);
+    return st;
+}
+
+/* Go over to a finer mesh. *done is 0, and all stays as it is, when an element would fold. */
+static utw_status split(loop *l, const unsigned char *wanted, int *split_done, utw_error *err)
+{
+    utw_status st = UTW_E_INTERNAL;
+    finer f = {NULL, NULL};
+    *split_done = 0;
+    UTW_TRY(utw_mesh_copy(l->s->mesh, &f.mesh, err));
+    UTW_TRY_ALLOC(f.order = utw_alloc((size_t)f.mesh->n_tri, 1));
+    memcpy(f.order, l->order, (size_t)f.mesh->n_tri);
+    UTW_TRY(refine_copy(&f, wanted, err));
+    if (utw_mesh_quality(f.mesh) >= UTW_LEAST_QUALITY) {
+        utw_field_free(l->s->field);
+        l->s->field = NULL;
+        utw_mesh_free(l->s->mesh);
+        utw_free(l->order);
+        l->s->mesh = f.mesh;
+        l->order = f.order;
+        f = (finer){NULL, NULL};
+        UTW_TRY(renew_mesh_data(l, err));
+        *split_done = 1;
+    }
+    st = UTW_OK;
+done:
+    utw_mesh_free(f.mesh);
+    utw_free(f.order);
+    return st;
+}
+
+/* Raise orders where an element's share exceeds what it may have. Returns how many elements got a
+ * higher order; wanted[t] = 1 where the order is used up. */
+static int raise_orders(loop *l, unsigned char *wanted)
+{
+    const utw_solved *s = l->s;
+    const int n = s->mesh->n_tri;
+    double scale[UTW_N_PAIR];
+    int raised = 0;
+    scales(&s->now, scale);
+    for (int t = 0; t < n; t++) {
+        double excess = 0; /* the largest share over the one allowed */
+        for (int i = 0; i < l->pairs; i++) {
+            const double allowed = 0.5 * l->options->tolerance * scale[i] / n;
+            excess = fmax(excess, l->share[t * UTW_N_PAIR + i] / allowed);
+        }
+        if (excess <= 1) continue;
+        if (l->order[t] >= SPLIT_ORDER) {
+            wanted[t] = 1;
+            continue;
+        }
+        int step = (int)ceil(log(excess) / log(1 / DECAY));
+        step = step > LARGEST_STEP ? LARGEST_STEP : step;
+        const int order = l->order[t] + step;
+        l->order[t] = (unsigned char)(order > SPLIT_ORDER ? SPLIT_ORDER : order);
+        raised++;
+    }
+    return raised;
+}
+
+/* Choose orders and cut elements for the next round; *changed is 0 when nothing is left to do. */
+static utw_status refine(loop *l, int *changed, utw_error *err)
+{
+    utw_status st = UTW_E_INTERNAL;
+    unsigned char *wanted;
+    UTW_TRY_ALLOC(wanted = utw_alloc((size_t)l->s->mesh->n_tri, 1));
+    *changed = raise_orders(l, wanted) > 0;
+    if (memchr(wanted, 1, (size_t)l->s->mesh->n_tri) != NULL) {
+        int split_done;
+        UTW_TRY(split(l, wanted, &split_done, err));
+        *changed |= split_done;
+    }
+    st = UTW_OK;
+done:
+    utw_free(wanted);
+    return st;
+}
+
+static utw_status run(loop *l, utw_error *err)
+{
+    utw_status st = UTW_E_INTERNAL;
+    const utw_options *o = l->options;
+    const int n = l->s->mesh->n_tri;
+    UTW_TRY_ALLOC(l->order = utw_alloc((size_t)n, 1));
+    memset(l->order, o->fixed_order > 0 ? o->fixed_order : o->tolerance > 3e-6 ? 3 : 4, (size_t)n);
+    UTW_TRY(renew_mesh_data(l, err));
+    for (;;) {
+        UTW_TRY(solve_once(l, err));
+        if (o->fixed_order > 0 || worst_gap(l) <= o->tolerance) break;
+        if (l->s->rounds >= o->max_rounds || l->s->field->n_free > o->max_unknowns) break;
+        int changed = 0;
+        UTW_TRY(refine(l, &changed, err));
+        if (changed == 0) break;
+    }
+    st = UTW_OK;
+done:
+    return st;
+}
+
+utw_status utw_adapt(utw_net *net, double *conductivity, const utw_options *options, int poisson,
+                     utw_solved *s, utw_error *err)
+{
+    utw_status st = UTW_E_INTERNAL;
+    loop l = {options, s, poisson ? UTW_N_PAIR : UTW_SHEAR_Y + 1, NULL, NULL};
+    memset(s, 0, sizeof *s);
+    s->net = net;
+    s->conductivity = conductivity;
+    utw_problems(s->pair);
+    const double start = utw_seconds();
+    const utw_mesh_options mesh_options = {options->mesh_scale, options->tolerance};
+    UTW_TRY(utw_mesh_create(net, &mesh_options, &s->mesh, err));
+    s->seconds_mesh = utw_seconds() - start;
+    UTW_TRY(utw_basis_store_create(&s->store, err));
+    UTW_TRY(run(&l, err));
+    s->seconds_solve = utw_seconds() - start - s->seconds_mesh;
+    st = UTW_OK;
+done:
+    utw_free(l.order);
+    utw_free(l.share);
+    return st;
+}

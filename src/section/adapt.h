@@ -1,0 +1,38 @@
+/* SPDX-License-Identifier: GPL-3.0-or-later
+ * Solving again with higher orders where the error is, until the bracket is as narrow as asked. */
+#ifndef UTW_SECTION_ADAPT_H
+#define UTW_SECTION_ADAPT_H
+
+#include "field/field.h"
+#include "section/problems.h"
+
+/** The mesh and everything on it. */
+typedef struct utw_solved {
+    utw_net *net; /* centroidal, scaled; owned */
+    utw_mesh *mesh;
+    utw_rim *rim;
+    utw_lift *lift;
+    utw_basis_store *store;
+    double *conductivity; /* [n_part] or NULL; owned */
+    utw_pair pair[UTW_N_PAIR];
+    utw_field *field;
+    utw_measures now, before; /* of the last round and the one before it */
+    double
+        *peak; /* [n_tri] greatest torsional stress seen in each element of the last round; owned */
+    int rounds, reached;
+    double gap; /* relative gap of J of the last round */
+    double seconds_mesh, seconds_solve;
+} utw_solved;
+
+/** Solve on a net about its centroid. With options->fixed_order this order everywhere, once. Orders
+ * start at 3 or 4 and rise element by element by the predicted decay of its share of the gap (a
+ * factor of about 0.15 an order was measured); elements whose order is used up are cut in four.
+ * [in] net is taken: utw_solved_clear() frees it, also after a failure. [in] poisson: 1 when
+ * Poisson's ratio matters (the anticlastic pairs are then refined too). UTW_E_MESH, UTW_E_SINGULAR,
+ * UTW_E_NOMEM. */
+utw_status utw_adapt(utw_net *net, double *conductivity, const utw_options *options, int poisson,
+                     utw_solved *solved, utw_error *err);
+
+void utw_solved_clear(utw_solved *solved);
+
+#endif
