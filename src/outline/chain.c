@@ -48,8 +48,7 @@ static utw_edge edge(const chain *c, int k)
     return (utw_edge){.curve = c->curve + c->first[k], .n = c->first[k + 1] - c->first[k]};
 }
 
-/* ---- vertices and edges
- * -------------------------------------------------------------------------- */
+/* ---- vertices and edges ------------------------------------------------------------------- */
 
 static utw_status check_vertices(chain *c)
 {
@@ -108,8 +107,7 @@ done:
     return st;
 }
 
-/* ---- corners
- * ------------------------------------------------------------------------------------- */
+/* ---- corners ------------------------------------------------------------------------------ */
 
 static const char *corner_key(const chain *c, int k)
 {
@@ -204,8 +202,7 @@ done:
     return st;
 }
 
-/* ---- the loop
- * ------------------------------------------------------------------------------------ */
+/* ---- the loop ----------------------------------------------------------------------------- */
 
 static void append(utw_loop *loop, utw_curve curve, int vertex)
 {

@@ -37,8 +37,7 @@ struct utw_let {
     int is_placed;     /* the message names its dimension already */
 };
 
-/* ---- functions of expressions
- * -------------------------------------------------------------------- */
+/* ---- functions of expressions ------------------------------------------------------------- */
 
 static double least(const double *x, int n)
 {
@@ -89,8 +88,7 @@ static int is_reserved(const char *name)
     return found;
 }
 
-/* ---- names
- * --------------------------------------------------------------------------------------- */
+/* ---- names -------------------------------------------------------------------------------- */
 
 static int find(const utw_let *let, const char *name)
 {
@@ -133,8 +131,7 @@ static utw_status find_name(utw_let *let, const char *name, int *k)
     return find_value(let, *k, let->err);
 }
 
-/* muparser asks where the value of a name is. It must not be thrown through: failures wait in *let.
- */
+/* muparser asks where the value of a name is. Failures wait in *let until it returns. */
 static double *value_of_name(const char *name, void *data)
 {
     utw_let *let = data;
@@ -159,8 +156,7 @@ static muParserHandle_t new_parser(utw_let *let)
     return parser;
 }
 
-/* ---- expressions
- * --------------------------------------------------------------------------------- */
+/* ---- expressions -------------------------------------------------------------------------- */
 
 /* muparser would take "t = 5" for an assignment. */
 static const char *assignment_in(const char *expression)
@@ -266,8 +262,7 @@ static utw_status find_value(utw_let *let, int k, utw_error *err)
     return st;
 }
 
-/* ---- the calls
- * ----------------------------------------------------------------------------------- */
+/* ---- the calls ---------------------------------------------------------------------------- */
 
 utw_status utw_let_create(int capacity, utw_let **let, utw_error *err)
 {

@@ -74,6 +74,8 @@ static void expressions_have_their_value(void **state)
         {"t == 5 && t != 4", 1},
         {"t <= 4 || t >= 6", 0},
         {"-t", -5},
+        {"t == 5 ? 1 : 1/(t-5)", 1}, /* what is not chosen is not computed */
+
         {"0.1+0.2", 0.1 + 0.2},
         {"1e-300*1e-10", 1e-310},
     };
