@@ -109,6 +109,62 @@ UTW_API const char *utw_outline_name(const utw_outline *outline);
 /** The units in the file, such as "mm N". Returned borrowed. */
 UTW_API const char *utw_outline_units(const utw_outline *outline);
 
+/* ---- trade shapes -------------------------------------------------------------------------------- */
+
+/** What a dimension of a trade shape is measured in. */
+typedef enum utw_shape_unit {
+    UTW_SHAPE_IN_LENGTH = 0, /* [L] */
+    UTW_SHAPE_IN_DEGREES = 1, /* dimensions are as on a drawing, so degrees here too */
+    UTW_SHAPE_IN_PER_CENT = 2,
+    UTW_SHAPE_IN_COUNT = 3 /* a whole number */
+} utw_shape_unit;
+
+/** A named dimension of a trade shape. */
+typedef struct utw_shape_dimension {
+    const char *key;      /* such as "tf" */
+    const char *meaning;  /* in a few words */
+    utw_shape_unit unit;
+    int required;         /* 1: it must be given */
+    double fallback;      /* its value when it is not given; NAN when that depends on others */
+    const char *otherwise; /* that value in words, such as "b/2"; "" when it is `fallback` or required */
+    double least, greatest; /* allowed range on its own; the other dimensions may narrow it */
+    int more;             /* 1: it must be more than `least`, not equal */
+} utw_shape_dimension;
+
+/** A trade shape as the list shows it. All text is returned borrowed and lives for ever. */
+typedef struct utw_shape_info {
+    const char *name;    /* such as "channel" */
+    const char *meaning; /* what it is, in a few words */
+    const char *origin;  /* where the origin of its coordinates lies */
+    const char *drawing; /* a dimensioned sketch in text, several lines */
+    int n_dimension;
+    const utw_shape_dimension *dimension; /* [n_dimension] */
+} utw_shape_info;
+
+/** Where a shape is put: first mirrored (x to -x), then turned, then shifted. */
+typedef struct utw_placement {
+    double at[2]; /* where the shape's origin goes [L] */
+    double turn;  /* counter-clockwise [rad]; quarter turns are exact */
+    int mirror;   /* 1: mirrored */
+} utw_placement;
+
+/** How many trade shapes there are. */
+UTW_API int utw_shape_count(void);
+
+/** Shape `index` of the list. [out] *info. UTW_E_ARGUMENT when out of range. */
+UTW_API UTW_CHECK utw_status utw_shape_get_info(int index, utw_shape_info *info, utw_error *err);
+
+/** An outline from a trade shape (docs/shapes.md), without material and loads. [in] name; keys[n] and values[n], the
+ *  dimensions; units, such as "mm N", as in a section file; placement (NULL: the shape's own coordinates); all
+ *  borrowed. [out] *outline, returned owned: utw_outline_free().
+ *  UTW_E_SYNTAX: unknown shape, unknown, missing or repeated dimension, bad units. UTW_E_OUTLINE: a value out of
+ *  range, or one that does not fit the others: the message names the dimension, its value and its limit.
+ *  UTW_E_ARGUMENT, UTW_E_NOMEM. */
+UTW_API UTW_CHECK utw_status utw_outline_from_shape(const char *name, int n, const char *const *keys,
+                                                    const double *values, const char *units,
+                                                    const utw_placement *placement,
+                                                    utw_outline **outline, utw_error *err);
+
 /* ---- constants ----------------------------------------------------------------------------------- */
 
 /** How far a number can be trusted. */

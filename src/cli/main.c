@@ -3,6 +3,7 @@
 #include <stdio.h>
 #include <string.h>
 
+#include "cli/shape.h"
 #include "untwist.h"
 
 int main(int argc, char **argv)
@@ -11,6 +12,7 @@ int main(int argc, char **argv)
         printf("untwist %s\n", utw_version());
         return 0;
     }
+    if (argc >= 2 && strcmp(argv[1], "shape") == 0) return utw_cli_shape(argc - 1, argv + 1);
     fprintf(stderr, "untwist: no command given; try 'untwist --help'\n");
     return 2;
 }

@@ -88,6 +88,11 @@ const char *utw_json_key(const utw_json *json)
     return json->string == NULL ? "" : json->string;
 }
 
+int utw_json_bool(const utw_json *json)
+{
+    return cJSON_IsTrue(json) != 0;
+}
+
 double utw_json_number(const utw_json *json)
 {
     return json->valuedouble;

@@ -39,6 +39,9 @@ int utw_json_count(const utw_json *json);
 /** Key of a member of an object. */
 const char *utw_json_key(const utw_json *json);
 
+/** Value of true (1) or false (0). */
+int utw_json_bool(const utw_json *json);
+
 /** Value of a number (infinite when it is beyond what a double holds) and of a string. */
 double utw_json_number(const utw_json *json);
 const char *utw_json_string(const utw_json *json);

@@ -2,6 +2,8 @@
  * The outline: what it owns, and the measure and direction of its loops. */
 #include "outline/outline.h"
 
+#include <string.h>
+
 #include "base/gauss.h"
 #include "base/memory.h"
 #include "base/vec2.h"
@@ -103,4 +105,23 @@ void utw_loop_reverse(utw_loop *loop)
         loop->vertex[i] = loop->vertex[j];
         loop->vertex[j] = vertex;
     }
+}
+
+void utw_outline_orient(utw_outline *outline)
+{
+    double box[4] = {HUGE_VAL, HUGE_VAL, -HUGE_VAL, -HUGE_VAL};
+    for (int p = 0; p < outline->n_part; p++)
+        for (int l = 0; l < outline->part[p].n_loop; l++) {
+            utw_loop *loop = &outline->part[p].loop[l];
+            if ((utw_loop_area(loop) < 0) != (l > 0)) utw_loop_reverse(loop);
+            for (int k = 0; l == 0 && k < loop->n; k++) {
+                double b[4];
+                utw_curve_box(&loop->curve[k], b);
+                for (int i = 0; i < 2; i++) {
+                    box[i] = fmin(box[i], b[i]);
+                    box[i + 2] = fmax(box[i + 2], b[i + 2]);
+                }
+            }
+        }
+    memcpy(outline->box, box, sizeof box);
 }

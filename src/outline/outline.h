@@ -68,4 +68,11 @@ double utw_loop_area(const utw_loop *loop);
 /** Turn a loop round. Vertex numbers follow their curves. */
 void utw_loop_reverse(utw_loop *loop);
 
+/** Turn loops so that outlines run counter-clockwise and holes clockwise, and set the box. */
+void utw_outline_orient(utw_outline *outline);
+
+/** Set units, length_unit and force_unit from text such as "mm N", called `what` in messages. UTW_E_SYNTAX (the outline
+ *  is unchanged), UTW_E_NOMEM. */
+utw_status utw_outline_set_units(utw_outline *outline, const char *text, const char *what, utw_error *err);
+
 #endif

@@ -2,7 +2,6 @@
  * Reading a section file: its top level, and what is checked when all of it is known. */
 #include "outline/read.h"
 
-#include <math.h>
 #include <stdio.h>
 #include <string.h>
 
@@ -10,17 +9,18 @@
 #include "outline/check.h"
 
 /* In the order they are read: expressions name dimensions, parts name materials. What stands in
- * place of "parts" (trade shapes, midlines) is one more line here, with its bit in SECTION. */
+ * place of "parts" is one more line here, with its bit in SECTION. */
 static const utw_key section_key[] = {
     {"let", utw_read_let, 0},     {"name", utw_read_text, offsetof(utw_outline, name)},
     {"units", utw_read_units, 0}, {"materials", utw_read_materials, 0},
-    {"parts", utw_read_parts, 0}, {"loads", utw_read_loads, 0},
+    {"parts", utw_read_parts, 0}, {"shape", utw_read_shape, 0},
+    {"loads", utw_read_loads, 0},
 };
 enum {
     N_KEY = sizeof section_key / sizeof section_key[0],
     LET = 1 << 0,
     UNITS = 1 << 2,
-    SECTION = 1 << 4
+    SECTION = 3 << 4
 };
 
 /* Either every part has a material or none. */
@@ -62,26 +62,6 @@ static utw_status read_section(utw_reader *r, const utw_json *json)
     return check_materials(r);
 }
 
-/* Material on the left of every curve. */
-static void orient(utw_outline *outline)
-{
-    double box[4] = {INFINITY, INFINITY, -INFINITY, -INFINITY};
-    for (int p = 0; p < outline->n_part; p++)
-        for (int l = 0; l < outline->part[p].n_loop; l++) {
-            utw_loop *loop = &outline->part[p].loop[l];
-            if ((utw_loop_area(loop) < 0) != (l > 0)) utw_loop_reverse(loop);
-            for (int k = 0; l == 0 && k < loop->n; k++) {
-                double b[4];
-                utw_curve_box(&loop->curve[k], b);
-                for (int i = 0; i < 2; i++) {
-                    box[i] = fmin(box[i], b[i]);
-                    box[i + 2] = fmax(box[i + 2], b[i + 2]);
-                }
-            }
-        }
-    memcpy(outline->box, box, sizeof box);
-}
-
 /* Put the place of a failed reading before its message. */
 static void name_place(const utw_reader *r)
 {
@@ -112,7 +92,7 @@ static utw_status parse(const char *text, size_t n, int n_set, const char *const
         name_place(&r);
         goto done;
     }
-    orient(r.outline);
+    utw_outline_orient(r.outline);
     UTW_TRY(utw_outline_check(r.outline, err));
     *outline = r.outline;
     r.outline = NULL;

@@ -75,10 +75,16 @@ utw_status utw_read_units(utw_reader *r, const utw_json *value, const char *what
 /** "materials", "parts", "loads". target: utw_outline. */
 utw_status utw_read_materials(utw_reader *r, const utw_json *value, const char *what, void *target);
 utw_status utw_read_parts(utw_reader *r, const utw_json *value, const char *what, void *target);
+/** "shape" in place of "parts": makes part 0. target: utw_outline, without parts. */
+utw_status utw_read_shape(utw_reader *r, const utw_json *value, const char *what, void *target);
 utw_status utw_read_loads(utw_reader *r, const utw_json *value, const char *what, void *target);
 
 /** One loop (array of vertices, circle or ellipse). target: utw_loop. */
 utw_status utw_read_loop(utw_reader *r, const utw_json *value, const char *what, void *target);
+
+/** "shape" in place of "outline" and "holes". target: utw_part, whose loops are replaced. */
+utw_status utw_read_part_shape(utw_reader *r, const utw_json *value, const char *what,
+                               void *target);
 
 /** A material by its name: int *target is its index. UTW_E_MATERIAL when it is not defined. */
 utw_status utw_read_material_name(utw_reader *r, const utw_json *value, const char *what,

@@ -38,8 +38,9 @@ static const utw_key part_key[] = {
     {"material", utw_read_material_name, offsetof(utw_part, material)},
     {"outline", read_outline, 0},
     {"holes", read_holes, 0},
+    {"shape", utw_read_part_shape, 0}, /* all its loops */
 };
-enum { N_KEY = sizeof part_key / sizeof part_key[0], OUTLINE = 2 };
+enum { N_KEY = sizeof part_key / sizeof part_key[0], OUTLINE = 2, HOLES = 4, SHAPE = 8 };
 
 static utw_status read_part(utw_reader *r, const utw_json *value, utw_outline *outline)
 {
@@ -50,7 +51,11 @@ static utw_status read_part(utw_reader *r, const utw_json *value, utw_outline *o
     if (part->loop == NULL) return utw_fail(r->err, UTW_E_NOMEM, "out of memory (part)");
     const utw_status st = utw_read_object(r, value, "the part", part_key, N_KEY, part, &given);
     if (st != UTW_OK) return st;
-    if (!(given & OUTLINE))
+    if ((given & SHAPE) && (given & (OUTLINE | HOLES)))
+        return utw_fail(r->err, UTW_E_SYNTAX,
+                        "\"shape\" and \"%s\" are both given; keep one",
+                        given & OUTLINE ? "outline" : "holes");
+    if (!(given & (OUTLINE | SHAPE)))
         return utw_fail(r->err, UTW_E_OUTLINE,
                         "\"outline\" is missing; give the vertices of the outer loop");
     r->part = -1;

@@ -19,27 +19,37 @@ static int find(const char *const *unit, const char *word)
     return -1;
 }
 
-utw_status utw_read_units(utw_reader *r, const utw_json *value, const char *what, void *target)
+utw_status utw_outline_set_units(utw_outline *outline, const char *text, const char *what,
+                                 utw_error *err)
 {
-    utw_outline *outline = target;
-    utw_status st = utw_read_text(r, value, what, &outline->units);
-    if (st != UTW_OK) return st;
-    char length[9] = "", force[9] = "", rest;
-    const int words = sscanf(outline->units, " %8s %8s %c", length, force, &rest);
+    char length[9] = "", force[9] = "", rest, units[sizeof length + sizeof force];
+    const int words = sscanf(text, " %8s %8s %c", length, force, &rest);
     const int l = find(length_unit, length), f = find(force_unit, force);
     if (words == 2 && l >= 0 && f >= 0) {
-        /* one blank between the two, whatever the file has */
+        /* one blank between the two, whatever was given */
+        snprintf(units, sizeof units, "%s %s", length_unit[l], force_unit[f]);
+        char *copy = utw_copy_string(units);
+        if (copy == NULL) return utw_fail(err, UTW_E_NOMEM, "out of memory (%s)", what);
+        utw_free(outline->units);
+        outline->units = copy;
         snprintf(outline->length_unit, sizeof outline->length_unit, "%s", length_unit[l]);
         snprintf(outline->force_unit, sizeof outline->force_unit, "%s", force_unit[f]);
-        snprintf(outline->units, strlen(outline->units) + 1, "%s %s", length_unit[l],
-                 force_unit[f]);
         return UTW_OK;
     }
     if (words == 2 && find(length_unit, force) >= 0 && find(force_unit, length) >= 0)
-        return utw_fail(r->err, UTW_E_SYNTAX, "%s is \"%s\"; the length comes first: \"%s %s\"",
-                        what, outline->units, force, length);
-    return utw_fail(r->err, UTW_E_SYNTAX,
+        return utw_fail(err, UTW_E_SYNTAX, "%s is \"%.40s\"; the length comes first: \"%s %s\"",
+                        what, text, force, length);
+    return utw_fail(err, UTW_E_SYNTAX,
                     "%s is \"%.40s\"; it must be a length (mm, cm, m, in, ft), a blank and a force "
                     "(N, kN, MN, lbf, kip), such as \"mm N\"",
-                    what, outline->units);
+                    what, text);
+}
+
+utw_status utw_read_units(utw_reader *r, const utw_json *value, const char *what, void *target)
+{
+    char *text = NULL;
+    utw_status st = utw_read_text(r, value, what, &text);
+    if (st == UTW_OK) st = utw_outline_set_units(target, text, what, r->err);
+    utw_free(text);
+    return st;
 }
