@@ -200,6 +200,7 @@ utw_status utw_outline_check(const utw_outline *outline, utw_error *err)
         st = x.st;
         goto done;
     }
+    UTW_TRY(check_direction(outline, err));
     UTW_TRY(check_nesting(&x));
     if (outline->n_part > 1) UTW_TRY(utw_net_create(outline, &net, err));
     st = UTW_OK;

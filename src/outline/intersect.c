@@ -7,7 +7,7 @@
 #include "base/vec2.h"
 #include "outline/hull.h"
 
-enum { MAX_VISITS = 100000, MAX_DEPTH = 120 };
+enum { MAX_VISITS = 20000, MAX_DEPTH = 120 };
 
 typedef struct search {
     const utw_curve *a, *b;
@@ -140,13 +140,50 @@ static void visit(search *x, const utw_hull *a, const utw_hull *b, int shared, i
     }
 }
 
+/* Newton's iteration for (c(t) - x) . c'(t) = 0 from t, kept in [0, 1]. */
+static double polish(const utw_curve *c, const double x[2], double t)
+{
+    for (int step = 0; step < 20; step++) {
+        double p[2], d1[2], d2[2];
+        utw_curve_point(c, t, p);
+        utw_curve_d1(c, t, d1);
+        utw_curve_d2(c, t, d2);
+        const double e[2] = {p[0] - x[0], p[1] - x[1]};
+        const double slope = utw_dot(d1, d1) + utw_dot(e, d2);
+        if (!(slope > 0)) break;
+        const double next = fmin(1, fmax(0, t - utw_dot(e, d1) / slope));
+        if (fabs(next - t) < 1e-16) break;
+        t = next;
+    }
+    return t;
+}
+
+/* Whether all of the line b lies farther than the tolerance on one side of the line a: most pairs
+ * of a large outline, so it is decided before anything else. */
+static int lies_beside(const utw_curve *a, const utw_curve *b, double tolerance)
+{
+    const double d[2] = {a->to[0] - a->from[0], a->to[1] - a->from[1]};
+    const double p = d[0] * (b->from[1] - a->from[1]) - d[1] * (b->from[0] - a->from[0]);
+    const double q = d[0] * (b->to[1] - a->from[1]) - d[1] * (b->to[0] - a->from[0]);
+    const double least = tolerance * tolerance * utw_dot(d, d);
+    return (p < 0) == (q < 0) && p * p > least && q * q > least;
+}
+
 int utw_curves_meet(const utw_curve *a, const utw_curve *b, int shared, double tolerance,
                     utw_meeting *meeting)
 {
+    if (shared == 0 && a->kind == UTW_LINE && b->kind == UTW_LINE &&
+        (lies_beside(a, b, tolerance) || lies_beside(b, a, tolerance)))
+        return 0;
     search x = {.a = a, .b = b, .tolerance = tolerance};
     const utw_hull whole_a = utw_hull_of(a, 0, 1), whole_b = utw_hull_of(b, 0, 1);
     visit(&x, &whole_a, &whole_b, shared, 0);
-    if (x.found && meeting != NULL) *meeting = x.meeting;
+    if (x.found && meeting != NULL) {
+        *meeting = x.meeting;
+        /* parameters are not even along a straight piece of a cubic */
+        meeting->s = polish(a, meeting->at, meeting->s);
+        meeting->t = polish(b, meeting->at, meeting->t);
+    }
     return x.found;
 }
 
@@ -227,24 +264,6 @@ static double distance_at(const utw_curve *c, double t, const double x[2])
     double p[2];
     utw_curve_point(c, t, p);
     return utw_distance(p, x);
-}
-
-/* Newton's iteration for (c(t) - x) . c'(t) = 0 from t, kept in [0, 1]. */
-static double polish(const utw_curve *c, const double x[2], double t)
-{
-    for (int step = 0; step < 20; step++) {
-        double p[2], d1[2], d2[2];
-        utw_curve_point(c, t, p);
-        utw_curve_d1(c, t, d1);
-        utw_curve_d2(c, t, d2);
-        const double e[2] = {p[0] - x[0], p[1] - x[1]};
-        const double slope = utw_dot(d1, d1) + utw_dot(e, d2);
-        if (!(slope > 0)) break;
-        const double next = fmin(1, fmax(0, t - utw_dot(e, d1) / slope));
-        if (fabs(next - t) < 1e-16) break;
-        t = next;
-    }
-    return t;
 }
 
 typedef struct nearest {

@@ -156,6 +156,21 @@ void drawing_reverse(drawing *d)
     reverse(last_loop(d));
 }
 
+void drawing_mixed(drawing *d)
+{
+    drawing_init(d);
+    drawing_part(d, -1);
+    drawing_move(d, 0, 0);
+    drawing_line(d, 7, -1);
+    drawing_arc(d, 9, 0.3, 8.5, 2.4);
+    drawing_cubic(d, 8, 5, 4, 2, 3, 6.1);
+    drawing_line(d, 0.4, 5.2);
+    drawing_arc(d, -0.9, 2.2, 0, 0);
+    drawing_close(d);
+    drawing_ellipse(d, 3, 2, 1.6, 0.7, 0.5);
+    drawing_reverse(d);
+}
+
 static void map(double p[2], const double m[4], const double shift[2])
 {
     const double x = p[0], y = p[1];

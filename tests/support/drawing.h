@@ -37,6 +37,9 @@ void drawing_ellipse(drawing *d, double x, double y, double a, double b, double 
 void drawing_polygon(drawing *d, int n, const double (*xy)[2]);
 void drawing_rectangle(drawing *d, double x0, double y0, double x1, double y1);
 
+/** A whole section: every kind of curve, an elliptic hole, no symmetry, about 10 long. */
+void drawing_mixed(drawing *d);
+
 /** Turn the last loop round: holes run clockwise. */
 void drawing_reverse(drawing *d);
 
