@@ -28,8 +28,7 @@ static const utw_loop *loop_of(const checking *x, const utw_curve_ref *r)
     return &x->outline->part[r->part].loop[r->loop];
 }
 
-/* ---- two curves that meet
- * ------------------------------------------------------------------------ */
+/* ---- two curves that meet ---------------------------------------------------------------- */
 
 static int parallel(const utw_curve *a, const utw_curve *b, const utw_meeting *m)
 {
@@ -108,8 +107,7 @@ static int check_pair(void *context, int i, int j)
     return 1;
 }
 
-/* ---- loops in loops
- * ------------------------------------------------------------------------------ */
+/* ---- loops in loops ---------------------------------------------------------------------- */
 
 static utw_status report_nesting(const checking *x, int index, int other)
 {
@@ -168,8 +166,21 @@ done:
     return st;
 }
 
-/* ---- all
- * ----------------------------------------------------------------------------------------- */
+/* The material lies on the left of every loop: whoever fills an outline has to see to it. */
+static utw_status check_direction(const utw_outline *outline, utw_error *err)
+{
+    for (int p = 0; p < outline->n_part; p++)
+        for (int l = 0; l < outline->part[p].n_loop; l++) {
+            if ((utw_loop_area(&outline->part[p].loop[l]) > 0) == (l == 0)) continue;
+            const utw_status st = utw_fail(err, UTW_E_INTERNAL,
+                                           "loop %d of part %d runs the wrong way round", l, p + 1);
+            utw_error_place(err, p, l, -1);
+            return st;
+        }
+    return UTW_OK;
+}
+
+/* ---- all --------------------------------------------------------------------------------- */
 
 static utw_status check_count(const utw_outline *outline, utw_error *err)
 {

@@ -41,8 +41,7 @@ static utw_status at_curve(utw_status st, const utw_loop *loop, int part, int in
     return st;
 }
 
-/* ---- scale
- * --------------------------------------------------------------------------------------- */
+/* ---- scale ------------------------------------------------------------------------------- */
 
 static int all_finite(const utw_curve *c)
 {
@@ -132,8 +131,7 @@ done:
     return st;
 }
 
-/* ---- one curve
- * ----------------------------------------------------------------------------------- */
+/* ---- one curve --------------------------------------------------------------------------- */
 
 static utw_status check_arc(const utw_curve *c, double size, const char *edge, utw_error *err)
 {

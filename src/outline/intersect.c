@@ -200,8 +200,7 @@ int utw_curves_narrow(const utw_curve *a, const utw_curve *b, int shared, double
     }
 }
 
-/* ---- a curve and itself
- * -------------------------------------------------------------------------- */
+/* ---- a curve and itself ------------------------------------------------------------------ */
 
 /* A cubic on one line: it turns back where its speed along the line changes sign. */
 static utw_self straight_cubic(const utw_curve *c, double *s, double *t)
@@ -256,8 +255,7 @@ utw_self utw_curve_meets_itself(const utw_curve *c, double *s, double *t)
     return UTW_SELF_CROSSES;
 }
 
-/* ---- nearest point
- * ------------------------------------------------------------------------------- */
+/* ---- nearest point ----------------------------------------------------------------------- */
 
 static double distance_at(const utw_curve *c, double t, const double x[2])
 {

@@ -30,8 +30,7 @@ void utw_strand_place(utw_error *err, const utw_net_build *b, int strand)
     utw_error_place(err, s->part, s->loop, loop->vertex != NULL ? loop->vertex[s->k] : s->k);
 }
 
-/* ---- joining
- * ------------------------------------------------------------------------------------- */
+/* ---- joining ----------------------------------------------------------------------------- */
 
 typedef struct start {
     double x, y;
@@ -102,8 +101,7 @@ done:
     return st;
 }
 
-/* ---- merging
- * ------------------------------------------------------------------------------------- */
+/* ---- merging ----------------------------------------------------------------------------- */
 
 typedef struct span {
     int low, high, strand;

@@ -15,8 +15,7 @@
 #include "outline/intersect.h"
 #include "outline/net_build.h"
 
-/* ---- edges that meet away from nodes
- * ------------------------------------------------------------- */
+/* ---- edges that meet away from nodes ----------------------------------------------------- */
 
 typedef struct verifying {
     const utw_net_build *b;
@@ -109,8 +108,7 @@ done:
     return st;
 }
 
-/* ---- around the nodes
- * ---------------------------------------------------------------------------- */
+/* ---- around the nodes -------------------------------------------------------------------- */
 
 /* An edge as it leaves a node, and the parts on either side of it seen in that direction. */
 typedef struct spoke {
@@ -196,8 +194,7 @@ done:
     return st;
 }
 
-/* ---- one inside the other, and all in one piece
- * -------------------------------------------------- */
+/* ---- one inside the other, and all in one piece ------------------------------------------ */
 
 static int root_of(int *parent, int i)
 {

@@ -36,8 +36,7 @@ static drawing polygon(int n, const double (*xy)[2])
     return d;
 }
 
-/* ---- closed forms
- * -------------------------------------------------------------------------------- */
+/* ---- closed forms ------------------------------------------------------------------------ */
 
 static void rectangle(void **state)
 {
@@ -231,8 +230,7 @@ static void hollow_box(void **state)
     assert_close(a.Zx, 27 * (4.5 - 1.5) + 3 * 1.5 * 0.75 + 3 * 7.5 * 3.75 + 9 * 8, TIGHT);
 }
 
-/* ---- plastic moduli
- * ------------------------------------------------------------------------------ */
+/* ---- plastic moduli ---------------------------------------------------------------------- */
 
 static void tee_by_hand(void **state)
 {
@@ -284,8 +282,7 @@ static void axis_at_a_step_of_the_width(void **state)
     assert_close(a.Zx, 10 * 0.5 + 10 * 2.5, TIGHT);
 }
 
-/* ---- cubics
- * -------------------------------------------------------------------------------------- */
+/* ---- cubics ------------------------------------------------------------------------------ */
 
 static void region_under_a_cubic(void **state)
 {
@@ -331,8 +328,7 @@ static void region_under_a_cubic(void **state)
     assert_close(a.Zy, (Sx - a.xp * A) + 2 * left, TIGHT);
 }
 
-/* ---- weights and parts
- * --------------------------------------------------------------------------- */
+/* ---- weights and parts ------------------------------------------------------------------- */
 
 static void two_materials_are_weighted(void **state)
 {
@@ -359,8 +355,7 @@ static void two_materials_are_weighted(void **state)
     drawing_clear(&d);
 }
 
-/* ---- invariance
- * ---------------------------------------------------------------------------------- */
+/* ---- invariance -------------------------------------------------------------------------- */
 
 static void nearly_straight_arc_keeps_its_digits(void **state)
 {

@@ -31,8 +31,7 @@ static void turn(drawing *d, double angle)
     drawing_map(d, m, none);
 }
 
-/* ---- closed forms
- * -------------------------------------------------------------------------------- */
+/* ---- closed forms ------------------------------------------------------------------------ */
 
 static void assert_same(const utw_area *a, const utw_area *b, double f, double rtol)
 {

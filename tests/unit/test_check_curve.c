@@ -32,8 +32,7 @@ static drawing polygon(int n, const double (*xy)[2])
     return d;
 }
 
-/* ---- what must pass
- * ------------------------------------------------------------------------------ */
+/* ---- what must pass ---------------------------------------------------------------------- */
 
 static void cubic_meeting_itself_is_seen(void **state)
 {
@@ -88,8 +87,7 @@ static void turning_straight_back_is_seen(void **state)
     drawing_clear(&d);
 }
 
-/* ---- holes
- * --------------------------------------------------------------------------------------- */
+/* ---- holes ------------------------------------------------------------------------------- */
 
 static void numbers_and_lengths_are_looked_at(void **state)
 {
@@ -140,8 +138,7 @@ static void numbers_and_lengths_are_looked_at(void **state)
     refused(&d, -1, -1, -1, "the section has no part; give it one");
 }
 
-/* ---- speed and bad temper
- * ------------------------------------------------------------------------ */
+/* ---- speed and bad temper ---------------------------------------------------------------- */
 
 int main(void)
 {

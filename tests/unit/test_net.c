@@ -63,20 +63,6 @@ static void assert_counts(utw_net *net, int n_node, int n_edge, int n_shared)
     utw_net_free(net);
 }
 
-static void refused(drawing *d, int part, const char *text)
-{
-    utw_error err;
-    utw_net *net = NULL;
-    const utw_status st = utw_net_create(drawing_done(d), &net, &err);
-    assert_int_equal(st, UTW_E_OUTLINE);
-    assert_null(net);
-    if (strstr(err.text, text) == NULL) print_error("%s\nlacks: %s\n", err.text, text);
-    assert_non_null(strstr(err.text, text));
-    assert_int_equal(err.part, part);
-    assert_int_equal(utw_outline_check(drawing_done(d), &err), UTW_E_OUTLINE);
-    drawing_clear(d);
-}
-
 static drawing start(void)
 {
     drawing d;
@@ -85,8 +71,7 @@ static drawing start(void)
     return d;
 }
 
-/* ---- one part
- * ------------------------------------------------------------------------------------ */
+/* ---- one part ---------------------------------------------------------------------------- */
 
 static void one_part_keeps_its_curves(void **state)
 {
@@ -123,8 +108,7 @@ static void closed_curves_are_cut_in_four(void **state)
     assert_counts(net, 12, 12, 0);
 }
 
-/* ---- several parts
- * ------------------------------------------------------------------------------- */
+/* ---- several parts ----------------------------------------------------------------------- */
 
 static void a_common_side_is_one_edge(void **state)
 {
@@ -284,8 +268,7 @@ static void a_ring_of_parts_encloses_a_void(void **state)
     assert_counts(net_of(&d), 12, 14, 2);
 }
 
-/* ---- what does not fit
- * --------------------------------------------------------------------------- */
+/* ---- what does not fit ------------------------------------------------------------------- */
 
 static void allocation_failures_are_reported(void **state)
 {
