@@ -5,7 +5,7 @@
 #include "base/memory.h"
 #include "base/vec2.h"
 #include "thinwall/cells.h"
-#include "thinwall/contact.h"
+#include "outline/contact.h"
 #include "thinwall/flow.h"
 #include "thinwall/sectorial.h"
 #include "thinwall/theory.h"

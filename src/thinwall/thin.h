@@ -3,8 +3,8 @@
 #ifndef UTW_THINWALL_THIN_H
 #define UTW_THINWALL_THIN_H
 
-#include "thinwall/graph.h"
-#include "thinwall/wall.h"
+#include "outline/graph.h"
+#include "outline/wall.h"
 
 /** A quadrature station of a wall with all that the integrals along walls need. Frame coordinates.
  */

@@ -1,8 +1,8 @@
 /* SPDX-License-Identifier: GPL-3.0-or-later */
-#include "thinwall/contact.h"
+#include "outline/contact.h"
 
 #include "support/midlines.h"
-#include "thinwall/graph.h"
+#include "outline/graph.h"
 
 static utw_status check(const utw_midline *m, utw_error *fault)
 {

@@ -1,5 +1,5 @@
 /* SPDX-License-Identifier: GPL-3.0-or-later */
-#include "thinwall/graph.h"
+#include "outline/graph.h"
 
 #include "base/memory.h"
 #include "support/midlines.h"

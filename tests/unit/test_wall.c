@@ -1,5 +1,5 @@
 /* SPDX-License-Identifier: GPL-3.0-or-later */
-#include "thinwall/wall.h"
+#include "outline/wall.h"
 
 #include "base/vec2.h"
 #include "support/support.h"

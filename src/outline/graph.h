@@ -1,10 +1,10 @@
 /* SPDX-License-Identifier: GPL-3.0-or-later
  * The walls of a midline as a graph: whether it is one, a spanning tree, and a basis of its cycles
  * (the cells). */
-#ifndef UTW_THINWALL_GRAPH_H
-#define UTW_THINWALL_GRAPH_H
+#ifndef UTW_OUTLINE_GRAPH_H
+#define UTW_OUTLINE_GRAPH_H
 
-#include "thinwall/wall.h"
+#include "outline/wall.h"
 
 /** Most walls and nodes of a midline: the cell equations are dense. */
 #define UTW_GRAPH_MAX 4096

@@ -1,6 +1,6 @@
 /* SPDX-License-Identifier: GPL-3.0-or-later
  * Walls on one another, nodes on walls, walls that cross. */
-#include "thinwall/contact.h"
+#include "outline/contact.h"
 
 #include "base/memory.h"
 #include "base/vec2.h"

@@ -1,6 +1,6 @@
 /* SPDX-License-Identifier: GPL-3.0-or-later
  * Geometry of one wall and its running integrals. */
-#include "thinwall/wall.h"
+#include "outline/wall.h"
 
 #include "base/gauss.h"
 #include "base/vec2.h"

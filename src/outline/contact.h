@@ -1,10 +1,10 @@
 /* SPDX-License-Identifier: GPL-3.0-or-later
  * Whether walls meet where no node joins them: a drawing mistake that would open a cell or hide a
  * junction. */
-#ifndef UTW_THINWALL_CONTACT_H
-#define UTW_THINWALL_CONTACT_H
+#ifndef UTW_OUTLINE_CONTACT_H
+#define UTW_OUTLINE_CONTACT_H
 
-#include "thinwall/wall.h"
+#include "outline/wall.h"
 
 /** Refuse two walls that lie on one another, a node that lies on a wall it is not joined to, and
  * two walls that cross away from their nodes. A node "lies on" a wall when it is within a hundredth

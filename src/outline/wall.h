@@ -1,8 +1,8 @@
 /* SPDX-License-Identifier: GPL-3.0-or-later
  * One wall of a midline: a line or a circular arc whose thickness varies linearly along its length.
  */
-#ifndef UTW_THINWALL_WALL_H
-#define UTW_THINWALL_WALL_H
+#ifndef UTW_OUTLINE_WALL_H
+#define UTW_OUTLINE_WALL_H
 
 #include "base/status.h"
 

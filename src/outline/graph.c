@@ -1,6 +1,6 @@
 /* SPDX-License-Identifier: GPL-3.0-or-later
  * Checking the numbers of a midline, its spanning tree and its cycle basis. */
-#include "thinwall/graph.h"
+#include "outline/graph.h"
 
 #include "base/memory.h"
 #include "base/vec2.h"
