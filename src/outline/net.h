@@ -31,10 +31,16 @@ typedef struct utw_net {
         *loop; /* [n_loop], owned; the first loop of each part is its outline, parts ascending */
 } utw_net;
 
-/** Build the net of an outline that has been read (and so checked). Closed curves (whole circles
- * and ellipses) are cut in four. Parts may touch along curves; where they do the common piece
- * becomes one edge with a part on either side. [out] *net, returned owned: utw_net_free().
- *  UTW_E_OUTLINE when parts overlap, leave a sliver, or do not hang together; UTW_E_NOMEM. */
+/** Build the net of an outline that has been read (and so checked); it is borrowed and not needed
+ *  afterwards. Closed curves (whole circles and ellipses) are cut in four; other curves stay whole
+ *  unless a vertex of another part lies on them.
+ *  Parts may touch along curves (lines, arcs of one circle or ellipse, pieces of one spline); where
+ *  they do the common piece becomes one edge with a part on either side. Points of different parts
+ *  within 1e-9 of the section's size are one node; within 1e-6 but not 1e-9 they leave a sliver.
+ *  The ends of an edge's curve are its nodes bit by bit.
+ *  [out] *net, returned owned: utw_net_free(); untouched on failure.
+ *  UTW_E_OUTLINE when parts overlap, leave a sliver, touch in a point only, meet at an angle of
+ *  nearly 0, or do not hang together along edges; UTW_E_NOMEM. */
 utw_status utw_net_create(const utw_outline *outline, utw_net **net, utw_error *err);
 
 void utw_net_free(utw_net *net);

@@ -32,22 +32,29 @@ static int no_memory(cutting *x)
     return 1;
 }
 
-static int near_miss(cutting *x, int strand, double distance)
+static int near_miss(cutting *x, int strand, double distance, int to_end)
 {
     char edge[128];
     utw_strand_text(edge, sizeof edge, x->b, strand);
     const utw_strand *s = &x->b->strand[x->vertex];
     const utw_loop *loop = &x->b->outline->part[s->part].loop[s->loop];
-    const double *p = s->curve.from;
+    const double *p = s->curve.from, clear = UTW_SLIVER * x->b->size;
     /* the strand that starts at a vertex follows the one that is named after it */
     const int k = loop->n == 1 ? 0 : (s->k + loop->n - 1) % loop->n;
-    x->st = utw_fail(x->err, UTW_E_OUTLINE,
-                     "part %d has a corner at (%.9g, %.9g) that lies %.3g beside %s, neither on it "
-                     "nor clear of it: "
-                     "give both the same coordinates (an arc the same centre and radius), or a gap "
-                     "or lap of more "
-                     "than %.3g",
-                     s->part + 1, p[0], p[1], distance, edge, UTW_SLIVER * x->b->size);
+    if (to_end)
+        x->st = utw_fail(x->err, UTW_E_OUTLINE,
+                         "part %d has a corner at (%.9g, %.9g) that lies %.3g beside an end of %s: "
+                         "give both the same "
+                         "coordinates, or move them more than %.3g apart",
+                         s->part + 1, p[0], p[1], distance, edge, clear);
+    else
+        x->st = utw_fail(x->err, UTW_E_OUTLINE,
+                         "part %d has a corner at (%.9g, %.9g) that lies %.3g beside %s, neither "
+                         "on it nor clear of "
+                         "it: give that edge a vertex with these coordinates (two arcs that touch "
+                         "need the same centre "
+                         "and radius), or leave a gap of more than %.3g",
+                         s->part + 1, p[0], p[1], distance, edge, clear);
     utw_error_place(x->err, s->part, s->loop, loop->vertex != NULL ? loop->vertex[k] : k);
     return 1;
 }
@@ -62,12 +69,11 @@ static int look_at_strand(void *context, int i)
     if (s->part == b->strand[x->vertex].part) return 0;
     const double to_end = fmin(utw_distance(p, s->curve.from), utw_distance(p, s->curve.to));
     if (to_end <= touch) return 0;
+    if (to_end <= UTW_SLIVER * b->size) return near_miss(x, i, to_end, 1);
     double t = 0;
     const double distance = utw_curve_nearest(&s->curve, p, UTW_SLIVER * b->size, &t);
     if (distance > UTW_SLIVER * b->size) return 0;
-    if (distance > touch) return near_miss(x, i, distance);
-    if (to_end < UTW_DETAIL * b->size)
-        return near_miss(x, i, to_end); /* a piece too short to use */
+    if (distance > touch) return near_miss(x, i, distance, 0);
     if (utw_grow((void **)&x->cut, &x->capacity, x->n + 1, sizeof *x->cut)) return no_memory(x);
     x->cut[x->n++] = (cut){i, t, {p[0], p[1]}};
     return 0;
