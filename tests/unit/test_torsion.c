@@ -11,16 +11,16 @@
  * shrink toward both. */
 static void integrals(const utw_torsion_solution *s, double from, double to, double sum[3])
 {
-    double x[16], w[16];
-    utw_gauss(16, x, w);
+    double x[10], w[10];
+    utw_gauss(10, x, w);
     sum[0] = sum[1] = sum[2] = 0;
     const double middle = (from + to) / 2;
     for (int side = 0; side < 2; side++) {
         double near = 0;
         const double end = side ? to : from;
-        for (int i = 30; i >= 0; i--) {
+        for (int i = 20; i >= 0; i--) {
             const double far = ldexp(1, -i);
-            for (int g = 0; g < 16; g++) {
+            for (int g = 0; g < 10; g++) {
                 utw_torsion_state at;
                 const double u = near + (far - near) * x[g];
                 utw_torsion_at(s, end + (middle - end) * u, &at);
