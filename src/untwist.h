@@ -69,6 +69,13 @@ UTW_API const char *utw_status_text(utw_status status);
 /** The version of the library, such as "0.1.0". Returned borrowed. */
 UTW_API const char *utw_version(void);
 
+/** Name and version of the library that factorises, such as "CHOLMOD 3.0.14", as loaded. [out] text[n],
+ *  cut short when n is too small. */
+UTW_API void utw_solver_version(char *text, size_t n);
+
+/** Name and version of the mesher, such as "Gmsh 4.8.4", as loaded. Calls the mesher. */
+UTW_API void utw_mesher_version(char *text, size_t n);
+
 /* ---- the section: what is given ------------------------------------------------------------------ */
 
 /** A cross-section as drawn: parts, materials, loads; checked when it is read. */
@@ -231,6 +238,10 @@ UTW_API int utw_constant_power(utw_constant which);
 
 /* ---- the solid solution -------------------------------------------------------------------------- */
 
+/** Told of every round of a solution. [in] user: the pointer of the options; round: from 1; unknowns of one
+ *  problem; gap: (J_high - J_low)/J so far. It must not call the library. */
+typedef void (*utw_progress)(void *user, int round, int unknowns, double gap);
+
 /** How to solve. Start from UTW_OPTIONS_INIT. */
 typedef struct utw_options {
     int version;       /* 1 */
@@ -239,9 +250,11 @@ typedef struct utw_options {
     int max_rounds;    /* at most so many solutions */
     int max_unknowns;  /* give up refining beyond so many unknowns of one problem */
     double mesh_scale; /* factor on the element size that follows from the wall thickness; 1 */
+    utw_progress progress; /* called after every round; NULL: nobody is told */
+    void *user;            /* handed to progress */
 } utw_options;
 
-#define UTW_OPTIONS_INIT {1, 1e-6, 0, 12, 2000000, 1.0}
+#define UTW_OPTIONS_INIT {1, 1e-6, 0, 12, 2000000, 1.0, NULL, NULL}
 
 /** The solved section. */
 typedef struct utw_solution utw_solution;
@@ -273,7 +286,8 @@ typedef struct utw_solution_info {
     double gap;        /* (J_high - J_low)/J */
     double tolerance;  /* asked for */
     int reached;       /* 1 when gap <= tolerance */
-    double seconds_mesh, seconds_solve; /* wall clock */
+    /* wall clock: reading the drawing, meshing, solving, and all of it */
+    double seconds_read, seconds_mesh, seconds_solve, seconds_total;
 } utw_solution_info;
 
 /** Fill *info. */
@@ -368,6 +382,29 @@ typedef struct utw_thin_station {
 UTW_API UTW_CHECK utw_status utw_thin_at(const utw_thin *thin, int wall, double u,
                                          const utw_thin_load *load, utw_thin_station *station,
                                          utw_error *err);
+
+/* ---- reports ------------------------------------------------------------------------------------- */
+
+/** What a report tells. Start from UTW_REPORT_INIT; what stays NULL is left out. */
+typedef struct utw_report {
+    int version;                  /* 1 */
+    const utw_solution *solution; /* borrowed; required */
+} utw_report;
+
+#define UTW_REPORT_INIT {1, NULL}
+
+/** A table for people: the constants with their bounds, trust and units, what is left out and why, what
+ *  the solution took. Plain text of at most 100 columns at usual tolerances. Angles are in degrees.
+ *  [out] *text, returned owned: utw_report_free(). UTW_E_ARGUMENT, UTW_E_NOMEM. */
+UTW_API UTW_CHECK utw_status utw_report_text(const utw_report *report, char **text, utw_error *err);
+
+/** The same for programs: JSON as docs/results.md says. Numbers read back as the very doubles of the
+ *  library, angles in degrees; a number that does not exist is null. [out] *text, returned owned:
+ *  utw_report_free(). UTW_E_ARGUMENT, UTW_E_NOMEM. */
+UTW_API UTW_CHECK utw_status utw_report_json(const utw_report *report, char **text, utw_error *err);
+
+/** Free a report; NULL is allowed. */
+UTW_API void utw_report_free(char *text);
 
 #ifdef __cplusplus
 }

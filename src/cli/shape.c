@@ -1,64 +1,62 @@
 /* SPDX-License-Identifier: GPL-3.0-or-later
  * untwist shape: lists the trade shapes, shows one, writes one as a section file. */
-#include "cli/shape.h"
-
 #include <math.h>
-#include <stdio.h>
 #include <stdlib.h>
 #include <string.h>
 
 #include "base/memory.h"
+#include "base/text.h"
 #include "base/vec2.h"
+#include "cli/commands.h"
+#include "cli/message.h"
 #include "outline/shape.h"
 #include "report/shape_file.h"
 
-enum { DONE = 0, WRONG_USE = 2, WRONG_INPUT = 3, NO_RESULT = 4 };
-
-static const char usage[] =
-    "usage: untwist shape                              list the shapes\n"
-    "       untwist shape NAME                         show its drawing and dimensions\n"
-    "       untwist shape NAME key=value ... > FILE    write it as a section file\n"
-    "options: --units \"mm N\"  length and force unit of the file\n"
-    "         --at X,Y        where the shape's origin goes\n"
-    "         --turn DEGREES  counter-clockwise, after mirroring\n"
-    "         --mirror        left and right exchanged\n";
+/* Print what was written and clear it. */
+static int print(utw_text *text)
+{
+    utw_error err;
+    char *content = NULL;
+    if (utw_text_take(text, &content, &err) != UTW_OK) return cli_fail(&err);
+    const int status = cli_print(content);
+    utw_free(content);
+    return status;
+}
 
 static int list_shapes(void)
 {
+    utw_text text = {.text = NULL};
     for (int i = 0; i < utw_shape_count(); i++) {
         const utw_shape *shape = utw_shape_at(i);
-        printf("%-16s%s\n%16s", shape->name, shape->meaning, "");
+        utw_text_add(&text, "%-16s%s\n%16s", shape->name, shape->meaning, "");
         for (int k = 0; k < shape->n_dimension; k++) {
             const utw_shape_dimension *d = &shape->dimension[k];
-            printf(d->required ? "%s%s" : "%s[%s]", k > 0 ? " " : "", d->key);
+            utw_text_add(&text, d->required ? "%s%s" : "%s[%s]", k > 0 ? " " : "", d->key);
         }
-        printf("\n");
+        utw_text_add(&text, "\n");
     }
-    printf("\n'untwist shape NAME' shows what the letters mean; those in [] may be left out.\n");
-    return DONE;
-}
-
-static void show_dimension(const utw_shape_dimension *d)
-{
-    static const char *const unit[] = {"", " [degrees]", " [per cent]", " [a whole number]"};
-    printf("  %-10s%s%s", d->key, d->meaning, unit[d->unit]);
-    if (!d->required && d->otherwise[0] != '\0') printf("; %s when not given", d->otherwise);
-    if (!d->required && d->otherwise[0] == '\0') printf("; %.10g when not given", d->fallback);
-    printf("\n");
+    utw_text_add(&text,
+                 "\n'untwist shape NAME' shows what the letters mean; those in [] may be left "
+                 "out.\n");
+    return print(&text);
 }
 
 static int show_shape(const utw_shape *shape)
 {
-    printf("%s: %s\n\n%s\n", shape->name, shape->meaning, shape->drawing);
-    for (int k = 0; k < shape->n_dimension; k++) show_dimension(&shape->dimension[k]);
-    printf("\nOrigin: %s.\n", shape->origin);
-    return DONE;
-}
-
-static int wrong_use(const char *what, const char *argument)
-{
-    fprintf(stderr, "untwist shape: %s%s\n%s", what, argument, usage);
-    return WRONG_USE;
+    static const char *const unit[] = {"", " [degrees]", " [per cent]", " [a whole number]"};
+    utw_text text = {.text = NULL};
+    utw_text_add(&text, "%s: %s\n\n%s\n", shape->name, shape->meaning, shape->drawing);
+    for (int k = 0; k < shape->n_dimension; k++) {
+        const utw_shape_dimension *d = &shape->dimension[k];
+        utw_text_add(&text, "  %-10s%s%s", d->key, d->meaning, unit[d->unit]);
+        if (!d->required && d->otherwise[0] != '\0')
+            utw_text_add(&text, "; %s when not given", d->otherwise);
+        if (!d->required && d->otherwise[0] == '\0')
+            utw_text_add(&text, "; %.10g when not given", d->fallback);
+        utw_text_add(&text, "\n");
+    }
+    utw_text_add(&text, "\nOrigin: %s.\n", shape->origin);
+    return print(&text);
 }
 
 /* A finite number that is all of the text up to `end` (NULL: up to its end). */
@@ -71,101 +69,111 @@ static int number(const char *text, const char *end, double *value)
 
 /* What the command line asks for. */
 typedef struct request {
-    const char *name, *units;
+    const char *units;
     utw_placement placement;
     int n;
-    const char **keys; /* [n]; point into copies that the arguments' '=' ends */
-    double *values;    /* [n] */
+    char **keys;    /* [n], owned */
+    double *values; /* [n], owned */
 } request;
 
-/* An option; moves *i past its value. */
-static int read_option(int argc, char **argv, int *i, request *q)
+static int read_placement(const cli_call *call, utw_placement *placement)
 {
-    const char *option = argv[*i], *value = *i + 1 < argc ? argv[*i + 1] : NULL;
-    if (strcmp(option, "--mirror") == 0) {
-        q->placement.mirror = 1;
-        return DONE;
-    }
-    const int units = strcmp(option, "--units") == 0, turn = strcmp(option, "--turn") == 0;
-    if (!units && !turn && strcmp(option, "--at") != 0) return wrong_use("unknown option ", option);
-    if (value == NULL) return wrong_use("a value is missing after ", option);
-    ++*i;
-    if (units) {
-        q->units = value;
-    } else if (turn) {
-        if (!number(value, NULL, &q->placement.turn))
-            return wrong_use("--turn takes degrees, not ", value);
-        q->placement.turn = fmod(q->placement.turn, 360) * (UTW_PI / 180);
-    } else {
-        const char *comma = strchr(value, ',');
-        if (comma == NULL || !number(value, comma, &q->placement.at[0]) ||
-            !number(comma + 1, NULL, &q->placement.at[1]))
-            return wrong_use("--at takes X,Y, not ", value);
-    }
-    return DONE;
+    const char *at = cli_text(call, "at"), *comma = at == NULL ? NULL : strchr(at, ',');
+    placement->mirror = cli_flag(call, "mirror");
+    placement->turn = fmod(cli_number(call, "turn", 0), 360) * (UTW_PI / 180);
+    if (at == NULL) return CLI_DONE;
+    if (comma != NULL && number(at, comma, &placement->at[0]) &&
+        number(comma + 1, NULL, &placement->at[1]))
+        return CLI_DONE;
+    cli_message("shape: --at takes X,Y, not '%s'", at);
+    return CLI_USAGE;
 }
 
-static int read_dimension(char *argument, request *q)
+/* An operand KEY=VALUE. */
+static int read_dimension(const char *operand, request *q)
 {
-    char *equals = strchr(argument, '=');
-    if (equals == NULL || equals == argument)
-        return wrong_use("a dimension is given as key=value, not ", argument);
-    if (!number(equals + 1, NULL, &q->values[q->n])) return wrong_use("not a number: ", argument);
-    *equals = '\0';
-    q->keys[q->n++] = argument;
-    return DONE;
+    const char *equals = strchr(operand, '=');
+    if (equals == NULL || equals == operand) {
+        cli_message("shape: a dimension is given as KEY=VALUE, not '%s'", operand);
+        return CLI_USAGE;
+    }
+    if (!number(equals + 1, NULL, &q->values[q->n])) {
+        cli_message("shape: not a number: '%s'", operand);
+        return CLI_USAGE;
+    }
+    char *key = utw_copy_string(operand);
+    if (key == NULL) {
+        cli_message("out of memory");
+        return CLI_NO_RESULT;
+    }
+    key[equals - operand] = '\0';
+    q->keys[q->n++] = key;
+    return CLI_DONE;
 }
 
-static int write_shape(const request *q)
+static int write_shape(const char *name, const request *q)
 {
     char *text = NULL;
     utw_error err;
-    const utw_status st = utw_shape_file_text(q->name, q->n, q->keys, q->values, q->units,
-                                              &q->placement, &text, &err);
+    const utw_status st = utw_shape_file_text(name, q->n, (const char *const *)q->keys, q->values,
+                                              q->units, &q->placement, &text, &err);
     if (st != UTW_OK) {
-        fprintf(stderr, "untwist shape: %s\n", err.text);
-        return st == UTW_E_SYNTAX ? WRONG_USE : st == UTW_E_OUTLINE ? WRONG_INPUT : NO_RESULT;
+        utw_error_prefix(&err, "shape: ");
+        cli_fail(&err);
+        /* what the library calls bad syntax of a file was typed here */
+        return st == UTW_E_SYNTAX ? CLI_USAGE : cli_exit_status(st);
     }
-    const int written = fputs(text, stdout) >= 0 && fflush(stdout) == 0;
+    const int status = cli_print(text);
     utw_free(text);
-    if (written) return DONE;
-    fprintf(stderr, "untwist shape: standard output cannot be written\n");
-    return NO_RESULT;
+    return status;
 }
 
-int utw_cli_shape(int argc, char **argv)
+static int run(const cli_call *call)
 {
-    request q = {.units = "mm N"};
-    int result = NO_RESULT;
-    if (argc == 1) return list_shapes();
-    q.keys = utw_alloc((size_t)argc, sizeof *q.keys);
-    q.values = utw_alloc((size_t)argc, sizeof *q.values);
+    if (call->n_operand == 0 && call->n_given == 0) return list_shapes();
+    if (call->n_operand == 0) {
+        cli_message("shape: name a shape; 'untwist shape' lists them");
+        return CLI_USAGE;
+    }
+    const char *name = call->operand[0], *units = cli_text(call, "units");
+    const utw_shape *shape = utw_shape_find(name);
+    if (shape != NULL && call->n_operand == 1 && call->n_given == 0) return show_shape(shape);
+    request q = {.units = units == NULL ? "mm N" : units};
+    const size_t n = (size_t)call->n_operand;
+    int status = read_placement(call, &q.placement);
+    q.keys = utw_alloc(n, sizeof *q.keys);
+    q.values = utw_alloc(n, sizeof *q.values);
     if (q.keys == NULL || q.values == NULL) {
-        fprintf(stderr, "untwist shape: out of memory\n");
-        goto done;
+        cli_message("out of memory");
+        status = CLI_NO_RESULT;
     }
-    result = DONE;
-    for (int i = 1; i < argc && result == DONE; i++) {
-        if (strcmp(argv[i], "--help") == 0) {
-            fputs(usage, stdout);
-            goto done;
-        }
-        if (argv[i][0] == '-')
-            result = read_option(argc, argv, &i, &q);
-        else if (q.name == NULL)
-            q.name = argv[i];
-        else
-            result = read_dimension(argv[i], &q);
-    }
-    if (result != DONE) goto done;
-    if (q.name == NULL) {
-        result = wrong_use("name a shape", "");
-        goto done;
-    }
-    const utw_shape *shape = utw_shape_find(q.name);
-    result = shape != NULL && q.n == 0 ? show_shape(shape) : write_shape(&q);
-done:
+    for (int i = 1; i < call->n_operand && status == CLI_DONE; i++)
+        status = read_dimension(call->operand[i], &q);
+    if (status == CLI_DONE) status = write_shape(name, &q);
+    for (int i = 0; i < q.n; i++) utw_free(q.keys[i]);
     utw_free(q.keys);
     utw_free(q.values);
-    return result;
+    return status;
 }
+
+static const cli_option options[] = {
+    {"units", "UNITS", "Length and force unit of the file. Without it: \"mm N\".", CLI_TEXT, 0, 0,
+     0},
+    {"at", "X,Y", "Where the origin of the shape goes.", CLI_TEXT, 0, 0, 0},
+    {"turn", "DEGREES", "Turn it counter-clockwise, after mirroring.", CLI_NUMBER, -1e6, 1e6, 0},
+    {"mirror", NULL, "Exchange left and right.", CLI_FLAG, 0, 0, 0},
+};
+
+const cli_command cli_shape = {
+    "shape",
+    "[NAME [KEY=VALUE]...]",
+    "trade shapes: list, dimensions, section files",
+    "Without NAME lists the trade shapes; with NAME alone shows its drawing and its dimensions; "
+    "with dimensions writes it as a section file to standard output, such as\n"
+    "untwist shape channel h=100 b=50 tf=8.5 tw=6 r=8.5 > channel.json",
+    0,
+    1000,
+    sizeof options / sizeof options[0],
+    options,
+    run,
+};

@@ -56,6 +56,7 @@ struct utw_outline {
     int n_dimension;
     utw_dimension *dimension; /* [n_dimension], owned */
     double box[4]; /* xmin, ymin, xmax, ymax of all parts [L] */
+    double seconds; /* wall clock of reading and checking */
 };
 
 /** Free what a loop, a part owns (not the struct itself). */

@@ -5,6 +5,7 @@
 #include <stdio.h>
 #include <string.h>
 
+#include "base/clock.h"
 #include "base/memory.h"
 #include "outline/check.h"
 
@@ -84,6 +85,7 @@ static utw_status parse(const char *text, size_t n, int n_set, const char *const
     utw_status st = UTW_E_INTERNAL;
     utw_json *json = NULL;
     utw_reader r = {.err = err, .n_set = n_set, .set = set, .part = -1, .loop = -1, .vertex = -1};
+    const double start = utw_seconds();
     UTW_TRY(utw_json_parse(text, n, &json, err));
     UTW_TRY(utw_let_create(0, &r.let, err));
     UTW_TRY_ALLOC(r.outline = utw_alloc(1, sizeof *r.outline));
@@ -94,6 +96,7 @@ static utw_status parse(const char *text, size_t n, int n_set, const char *const
     }
     utw_outline_orient(r.outline);
     UTW_TRY(utw_outline_check(r.outline, err));
+    r.outline->seconds = utw_seconds() - start;
     *outline = r.outline;
     r.outline = NULL;
     st = UTW_OK;

@@ -104,6 +104,8 @@ static utw_status solve_once(loop *l, utw_error *err)
     s->rounds++;
     s->gap = relative_gap(&s->now);
     s->reached = s->gap <= l->options->tolerance;
+    if (l->options->progress != NULL)
+        l->options->progress(l->options->user, s->rounds, field->n_free, s->gap);
     return UTW_OK;
 }
 

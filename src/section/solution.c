@@ -4,6 +4,7 @@
 
 #include <math.h>
 
+#include "base/clock.h"
 #include "base/memory.h"
 #include "base/status.h"
 #include "base/vec2.h"
@@ -87,6 +88,7 @@ utw_status utw_solve(const utw_outline *outline, const utw_options *options,
     const utw_options defaults = UTW_OPTIONS_INIT;
     utw_net *net = NULL;
     utw_solution *s = NULL;
+    const double start = utw_seconds();
     if (outline == NULL || solution == NULL)
         return utw_fail(err, UTW_E_ARGUMENT, "utw_solve: outline and solution must not be NULL");
     UTW_TRY(check_options(options == NULL ? &defaults : options, err));
@@ -107,6 +109,7 @@ utw_status utw_solve(const utw_outline *outline, const utw_options *options,
     utw_constants_of_solution(&s->area, s->unit, &s->solved, s->nu, s->value);
     UTW_TRY(note_corners(s, err));
     torsion_modulus(s);
+    s->seconds = utw_seconds() - start;
     *solution = s;
     s = NULL;
     st = UTW_OK;
@@ -159,6 +162,8 @@ void utw_solution_get_info(const utw_solution *s, utw_solution_info *info)
                                 s->solved.gap,
                                 s->options.tolerance,
                                 s->solved.reached,
+                                s->outline->seconds,
                                 s->solved.seconds_mesh,
-                                s->solved.seconds_solve};
+                                s->solved.seconds_solve,
+                                s->outline->seconds + s->seconds};
 }

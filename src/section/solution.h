@@ -15,6 +15,7 @@ struct utw_solution {
     double origin[2], unit;     /* the solved net: p = (drawing - origin) / unit */
     utw_solved solved;
     utw_options options;
+    double seconds; /* wall clock of utw_solve() */
     utw_constant_value value[UTW_CONSTANT_COUNT];
     int n_corner;
     double (*corner)[2]; /* [n_corner][2] sharp re-entrant corners, in the drawing's coordinates;

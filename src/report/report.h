@@ -1,0 +1,29 @@
+/* SPDX-License-Identifier: GPL-3.0-or-later
+ * What the kinds of report have in common. */
+#ifndef UTW_REPORT_REPORT_H
+#define UTW_REPORT_REPORT_H
+
+#include "untwist.h"
+
+/** What every report must say. */
+#define UTW_CAUTION                                                                                \
+    "Linear elastic material and small displacements; no buckling, no fatigue, no plastic "        \
+    "collapse. "                                                                                   \
+    "The governing design code and a licensed engineer decide."
+
+/** Check what a caller hands in; `function` stands in the message. UTW_E_ARGUMENT. */
+utw_status utw_report_check(const utw_report *report, char **text, const char *function,
+                            utw_error *err);
+
+/** A constant as reports state it: angles in degrees. [out] *quantity; a value that is not finite
+ * is UTW_E_UNBOUNDED. Statuses of utw_solution_constant(), which says why it is absent. */
+utw_status utw_report_constant(const utw_solution *solution, utw_constant which,
+                               utw_quantity *quantity, utw_error *err);
+
+/** "exact", "bracket" or "estimate". Returned borrowed. */
+const char *utw_report_trust(utw_trust trust);
+
+/** Unit of a constant, such as "mm^4", "deg" for angles, "-" for factors. [out] text[n]. */
+void utw_report_unit(const utw_solution *solution, utw_constant which, char *text, size_t n);
+
+#endif
