@@ -172,6 +172,39 @@ UTW_API UTW_CHECK utw_status utw_outline_from_shape(const char *name, int n, con
                                                     const utw_placement *placement,
                                                     utw_outline **outline, utw_error *err);
 
+/* ---- midlines ------------------------------------------------------------------------------------ */
+
+/** One wall of a midline: straight, or a circular arc; its thickness changes linearly along it. */
+typedef struct utw_wall {
+    int from, to;  /* indices of its nodes; the direction in which its stations and flows are counted */
+    double t0, t1; /* thickness at `from` and at `to` [L], > 0 */
+    int arc;       /* 0: straight; 1: an arc through `mid` */
+    double mid[2]; /* a point of the arc, best its mid-point [L]; not read when arc is 0. With from = to, or
+                      ends at the same place, it is the point opposite, and the wall is a full circle,
+                      run counter-clockwise. */
+} utw_wall;
+
+/** The thin-walled idealisation of a section: lines with thickness that meet at nodes; open, closed, with
+ *  any number of cells and fins. Different nodes at the same place are not joined: that is a slit. At most
+ *  4096 nodes and walls. */
+typedef struct utw_midline {
+    int n_nodes, n_walls;
+    double (*nodes)[2]; /* [n_nodes] x, y [L] */
+    utw_wall *walls;    /* [n_walls] */
+} utw_midline;
+
+/** An outline from a midline: its walls with their thickness, corners mitred, ends square, cells as holes (docs/section-file.md).
+ *  [in] midline, copied; units, such as "mm N", borrowed. [out] *outline, returned owned: utw_outline_free(). It has
+ *  no material and no loads.
+ *  UTW_E_ARGUMENT, UTW_E_NOMEM; UTW_E_OUTLINE as utw_thin_solve(), and two nodes in one place, a wall too short
+ *  or an arc too narrow for its thickness, walls that run into one another: the message names walls (from 1) and
+ *  nodes (from 0), err->vertex is the index of one of them. */
+UTW_API UTW_CHECK utw_status utw_outline_from_midline(const utw_midline *midline, const char *units,
+                                                      utw_outline **outline, utw_error *err);
+
+/** The midline an outline was drawn by; NULL when it was not drawn by one. Returned borrowed. */
+UTW_API const utw_midline *utw_outline_midline(const utw_outline *outline);
+
 /* ---- constants ----------------------------------------------------------------------------------- */
 
 /** How far a number can be trusted. */
@@ -294,25 +327,6 @@ typedef struct utw_solution_info {
 UTW_API void utw_solution_get_info(const utw_solution *solution, utw_solution_info *info);
 
 /* ---- thin-walled theory -------------------------------------------------------------------------- */
-
-/** One wall of a midline: straight, or a circular arc; its thickness changes linearly along it. */
-typedef struct utw_wall {
-    int from, to;  /* indices of its nodes; the direction in which its stations and flows are counted */
-    double t0, t1; /* thickness at `from` and at `to` [L], > 0 */
-    int arc;       /* 0: straight; 1: an arc through `mid` */
-    double mid[2]; /* a point of the arc, best its mid-point [L]; not read when arc is 0. With from = to, or
-                      ends at the same place, it is the point opposite, and the wall is a full circle,
-                      run counter-clockwise. */
-} utw_wall;
-
-/** The thin-walled idealisation of a section: lines with thickness that meet at nodes; open, closed, with
- *  any number of cells and fins. Different nodes at the same place are not joined: that is a slit. At most
- *  4096 nodes and walls. */
-typedef struct utw_midline {
-    int n_nodes, n_walls;
-    double (*nodes)[2]; /* [n_nodes] x, y [L] */
-    utw_wall *walls;    /* [n_walls] */
-} utw_midline;
 
 /** What the thin-walled theory says of a midline: area on the midline, no thickness terms in the second
  *  moments and in Iw. Second moments are about the centroid in the directions of the drawing's axes.

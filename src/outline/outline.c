@@ -30,6 +30,11 @@ void utw_outline_free(utw_outline *outline)
     for (int i = 0; i < outline->n_load; i++) utw_free(outline->load[i].name);
     for (int i = 0; i < outline->n_dimension; i++) utw_free(outline->dimension[i].name);
     utw_free(outline->dimension);
+    if (outline->midline != NULL) {
+        utw_free(outline->midline->nodes);
+        utw_free(outline->midline->walls);
+    }
+    utw_free(outline->midline);
     utw_free(outline->part);
     utw_free(outline->material);
     utw_free(outline->load);

@@ -55,6 +55,7 @@ struct utw_outline {
     utw_load *load;
     int n_dimension;
     utw_dimension *dimension; /* [n_dimension], owned */
+    utw_midline *midline; /* what the part was thickened from, owned; NULL when it was not */
     double box[4]; /* xmin, ymin, xmax, ymax of all parts [L] */
     double seconds; /* wall clock of reading and checking */
 };
@@ -71,6 +72,10 @@ void utw_loop_reverse(utw_loop *loop);
 
 /** Turn loops so that outlines run counter-clockwise and holes clockwise, and set the box. */
 void utw_outline_orient(utw_outline *outline);
+
+/** Make part 0 of an outline without parts by thickening a midline, and keep it. midline->nodes and walls are taken (and
+ *  set to NULL) on success. UTW_E_NOMEM and what utw_thicken() gives. */
+utw_status utw_outline_take_midline(utw_outline *outline, utw_midline *midline, utw_error *err);
 
 /** Set units, length_unit and force_unit from text such as "mm N", called `what` in messages. UTW_E_SYNTAX (the outline
  *  is unchanged), UTW_E_NOMEM. */

@@ -12,16 +12,16 @@
 /* In the order they are read: expressions name dimensions, parts name materials. What stands in
  * place of "parts" is one more line here, with its bit in SECTION. */
 static const utw_key section_key[] = {
-    {"let", utw_read_let, 0},     {"name", utw_read_text, offsetof(utw_outline, name)},
-    {"units", utw_read_units, 0}, {"materials", utw_read_materials, 0},
-    {"parts", utw_read_parts, 0}, {"shape", utw_read_shape, 0},
-    {"loads", utw_read_loads, 0},
+    {"let", utw_read_let, 0},         {"name", utw_read_text, offsetof(utw_outline, name)},
+    {"units", utw_read_units, 0},     {"materials", utw_read_materials, 0},
+    {"parts", utw_read_parts, 0},     {"shape", utw_read_shape, 0},
+    {"midline", utw_read_midline, 0}, {"loads", utw_read_loads, 0},
 };
 enum {
     N_KEY = sizeof section_key / sizeof section_key[0],
     LET = 1 << 0,
     UNITS = 1 << 2,
-    SECTION = 3 << 4
+    SECTION = 7 << 4
 };
 
 /* Either every part has a material or none. */

@@ -77,6 +77,8 @@ utw_status utw_read_materials(utw_reader *r, const utw_json *value, const char *
 utw_status utw_read_parts(utw_reader *r, const utw_json *value, const char *what, void *target);
 /** "shape" in place of "parts": makes part 0. target: utw_outline, without parts. */
 utw_status utw_read_shape(utw_reader *r, const utw_json *value, const char *what, void *target);
+/** "midline" in place of "parts": likewise, and keeps the midline. */
+utw_status utw_read_midline(utw_reader *r, const utw_json *value, const char *what, void *target);
 utw_status utw_read_loads(utw_reader *r, const utw_json *value, const char *what, void *target);
 
 /** One loop (array of vertices, circle or ellipse). target: utw_loop. */
