@@ -326,6 +326,114 @@ typedef struct utw_solution_info {
 /** Fill *info. */
 UTW_API void utw_solution_get_info(const utw_solution *solution, utw_solution_info *info);
 
+/* ---- stresses ------------------------------------------------------------------------------------ */
+
+/** What acts on the section: the stress resultants of one load case, on the face whose normal is +z. N and the
+ *  moments are about the centroid. T is the torque of uniform torsion. */
+typedef struct utw_forces {
+    double N, Vx, Vy; /* [F] */
+    double Mx, My, T; /* [F L] */
+    double B;         /* bimoment int sigma omega dA [F L^2] */
+    int has_at;       /* 0: Vx and Vy act at the shear centre (energy definition); 1: at the place below, and bring
+                         the torque Vy (at x - xs) - Vx (at y - ys) */
+    double at[2];     /* in the drawing's coordinates [L] */
+} utw_forces;
+
+/** The number of load cases of an outline. */
+UTW_API int utw_outline_load_count(const utw_outline *outline);
+
+/** The k-th load case: its name, returned borrowed, NULL when k is out of range. [out] *forces; may be NULL. */
+UTW_API const char *utw_outline_load(const utw_outline *outline, int k, utw_forces *forces);
+
+/** The stresses of a solved section under any load: the stresses of unit forces, prepared once, so that a load
+ *  case costs a sum. */
+typedef struct utw_stress utw_stress;
+
+/** Prepare. [in] solution, borrowed; it must outlive the stresses. [out] *stress, returned owned:
+ *  utw_stress_free(). UTW_E_ARGUMENT; UTW_E_MATERIAL when the parts have different moduli of elasticity;
+ *  UTW_E_NOMEM. */
+UTW_API UTW_CHECK utw_status utw_stress_create(const utw_solution *solution, utw_stress **stress, utw_error *err);
+
+/** Free it; NULL is allowed. */
+UTW_API void utw_stress_free(utw_stress *stress);
+
+/** The stress at a point. Other components than these three are zero in this theory (Saint-Venant). */
+typedef struct utw_stress_point {
+    double at[2];                        /* the place, in the drawing's coordinates [L] */
+    double sigma_z, tau_xz, tau_yz;      /* [F/L^2] */
+    double tau;                          /* sqrt(tau_xz^2 + tau_yz^2) */
+    double von_mises;                    /* sqrt(sigma_z^2 + 3 tau^2) */
+    double principal_max, principal_min; /* sigma_z/2 +- sqrt(sigma_z^2/4 + tau^2) */
+    double omega;                        /* warping function about the shear centre, mean 0 [L^2] */
+    double sigma_error, tau_error;       /* estimated errors of sigma_z and of (tau_xz, tau_yz): see below */
+    int kept_out;                        /* 1: in the circle around a sharp re-entrant corner while shear or torsion
+                                            acts: the stress here depends on a radius that is not drawn */
+} utw_stress_point;
+
+/** The stress of a load at a point of the section, found in the mesh without solving again. The shear stress is the
+ *  mean of two independent solutions, one from displacements and one in equilibrium; tau_error is twice their
+ *  distance at the point, plus what the brackets of J and of the shear centre add: an estimate, not a bound.
+ *  sigma_error is not zero with a bimoment only. Points outside by less than 1e-5 of the section's size are moved to
+ *  the boundary. Methods: docs/stress.md.
+ *  UTW_E_ARGUMENT; UTW_E_LOAD when the point lies outside the section (the message names the nearest point of it),
+ *  when a number is not finite, or for a bimoment on a section that does not warp; UTW_E_MATERIAL for a shear force
+ *  when there is no Poisson's ratio. */
+UTW_API UTW_CHECK utw_status utw_stress_at(const utw_stress *stress, const utw_forces *forces, const double at[2],
+                                           utw_stress_point *point, utw_error *err);
+
+/** Kinds of greatest stresses. */
+typedef enum utw_stress_kind {
+    UTW_VON_MISES = 0,
+    UTW_PRINCIPAL_MAX, /* greatest tension */
+    UTW_PRINCIPAL_MIN, /* greatest compression: the least principal stress */
+    UTW_SIGMA_MAX,     /* greatest and least sigma_z */
+    UTW_SIGMA_MIN,
+    UTW_TAU_MAX, /* greatest shear stress on the section, sqrt(tau_xz^2 + tau_yz^2) */
+    UTW_STRESS_KIND_COUNT
+} utw_stress_kind;
+
+/** Key of a kind in results, such as "von_mises". Returned borrowed; NULL when out of range. */
+UTW_API const char *utw_stress_kind_key(utw_stress_kind kind);
+
+/** A greatest stress: its value [F/L^2], the estimated error of the value, its place [L]. */
+typedef struct utw_stress_peak {
+    double value, error;
+    double at[2];
+} utw_stress_peak;
+
+/** The greatest stresses of one load case anywhere in the section, found on the elements' polynomials. */
+typedef struct utw_stress_peaks {
+    utw_stress_peak peak[UTW_STRESS_KIND_COUNT];
+    double margin; /* yield stress over the greatest von Mises stress, minus 1 (the least over all parts); NaN when a
+                      part has no yield stress, infinite when nothing acts */
+    int unbounded; /* 1: shear or torsion acts and the section has sharp re-entrant corners, where these stresses have
+                      no bound. All but sigma_z are then those outside the circles of utw_stress_corner() */
+} utw_stress_peaks;
+
+/** Find them. Statuses as of utw_stress_at(). */
+UTW_API UTW_CHECK utw_status utw_stress_peaks_of(const utw_stress *stress, const utw_forces *forces,
+                                                 utw_stress_peaks *peaks, utw_error *err);
+
+/** For every kind the greatest over n load cases, and the case it belongs to; the least margin. */
+typedef struct utw_stress_envelope {
+    utw_stress_peak peak[UTW_STRESS_KIND_COUNT];
+    int governing[UTW_STRESS_KIND_COUNT]; /* index of the case */
+    double margin;
+    int margin_case; /* -1 when there is none */
+} utw_stress_envelope;
+
+/** [in] peaks[n], n >= 1, borrowed. UTW_E_ARGUMENT. */
+UTW_API UTW_CHECK utw_status utw_stress_envelope_of(int n, const utw_stress_peaks *peaks,
+                                                    utw_stress_envelope *envelope, utw_error *err);
+
+/** The number of sharp re-entrant corners. */
+UTW_API int utw_stress_corner_count(const utw_stress *stress);
+
+/** The k-th one: its place at[2] [L], and the radius [L] of the circle around it outside of which stresses are
+ *  reported: a tenth of the thinner wall at the corner. UTW_E_ARGUMENT. */
+UTW_API UTW_CHECK utw_status utw_stress_corner(const utw_stress *stress, int k, double at[2], double *radius,
+                                               utw_error *err);
+
 /* ---- thin-walled theory -------------------------------------------------------------------------- */
 
 /** What the thin-walled theory says of a midline: area on the midline, no thickness terms in the second

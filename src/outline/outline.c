@@ -130,3 +130,18 @@ void utw_outline_orient(utw_outline *outline)
         }
     memcpy(outline->box, box, sizeof box);
 }
+
+int utw_outline_load_count(const utw_outline *outline)
+{
+    return outline->n_load;
+}
+
+const char *utw_outline_load(const utw_outline *outline, int k, utw_forces *forces)
+{
+    if (k < 0 || k >= outline->n_load) return NULL;
+    const utw_load *l = &outline->load[k];
+    if (forces != NULL)
+        *forces = (utw_forces){l->N, l->Vx, l->Vy, l->Mx, l->My, l->T, l->B, l->has_at,
+                               {l->at[0], l->at[1]}};
+    return l->name;
+}
