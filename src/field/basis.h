@@ -45,6 +45,8 @@ void utw_basis(int p, double r, double s, double *N, double *Nr, double *Ns);
  * derivatives by x: phi[n-1], dphi[n-1]. The edge function is la lb phi[k-2](lb - la). */
 void utw_edge_kernels(int n, double x, double *phi, double *dphi);
 
+#define UTW_SERIES_TERMS (UTW_SERIES_MAX - 1) /* edge functions of degree 2 .. UTW_SERIES_MAX */
+
 /** Tables at the collapsed Gauss-Legendre points of q x q points: exact for polynomials of degree
  * 2q-2 on the triangle (Duffy 1982; Stroud 1971). All weights are positive, all points inside.
  * Functions are those of order q-1. */
@@ -52,6 +54,7 @@ typedef struct utw_table {
     int q, n_point, n_function, order;
     double *r, *s, *w;   /* [n_point]; weights sum to 1/2 */
     double *N, *Nr, *Ns; /* [n_point][n_function] */
+    double *phi, *dphi;  /* [n_point][3][UTW_SERIES_TERMS]: utw_edge_kernels() of every side */
 } utw_table;
 
 /** Reference matrices of order p and moments of quadratic loads. */

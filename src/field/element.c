@@ -55,11 +55,13 @@ void utw_element_index(const utw_element *el, int p, int *index)
     }
 }
 
-/* On a quarter circle the map is no polynomial: ten points a direction integrate it to rounding
- * whatever the order. */
+/* A curved map is no polynomial. On a quarter circle ten points a direction integrate it to
+ * rounding whatever the order, on an eighth seven do. */
 int utw_element_points(const utw_element *el)
 {
-    const int least = el->blend.any ? 10 : 3; /* squares of quadratic fluxes need three */
+    const int least = el->blend.turning > 0.8   ? 10
+                      : el->blend.turning > 0.3 ? 7
+                                                : 3; /* squares of quadratics: 3 */
     const int q = el->top + (el->blend.any ? 2 : 1);
     return q < least ? least : q;
 }
@@ -92,18 +94,14 @@ static utw_status straight_stiffness(const utw_element *el, utw_basis_store *sto
 }
 
 /* K = B B^T with the rows of B the weighted gradients at the points. */
-static utw_status curved_stiffness(const utw_element *el, utw_basis_store *store, double *K,
-                                   double *B, utw_error *err)
+static void curved_stiffness(const utw_element *el, const utw_map *map, double *K, double *B)
 {
-    const utw_table *t = utw_basis_table(store, utw_element_points(el));
-    if (t == NULL) return utw_fail(err, UTW_E_NOMEM, "out of memory (%s)", __func__);
+    const utw_table *t = map->table;
     int index[UTW_FUNCTIONS_MAX];
     utw_element_index(el, t->order, index);
     const int n = el->n;
     for (int k = 0; k < t->n_point; k++) {
-        double xy[2], J[4];
-        utw_blend_at(&el->blend, t->r[k], t->s[k], xy, J);
-        const double det = J[0] * J[3] - J[1] * J[2], root = sqrt(t->w[k] / det);
+        const double *J = map->J[k], root = sqrt(t->w[k] / map->det[k]);
         const double *Nr = t->Nr + k * t->n_function, *Ns = t->Ns + k * t->n_function;
         double *Bx = B + 2 * k * n, *By = Bx + n;
         for (int i = 0; i < n; i++) { /* grad N = J^-T (Nr, Ns), times sqrt(w det) */
@@ -116,44 +114,59 @@ static utw_status curved_stiffness(const utw_element *el, utw_basis_store *store
     cblas_dsyrk(CblasRowMajor, CblasLower, CblasTrans, n, 2 * t->n_point, 1, B, n, 0, K, n);
     for (int i = 0; i < n; i++)
         for (int j = 0; j < i; j++) K[j * n + i] = K[i * n + j];
+}
+
+utw_status utw_element_map(const utw_element *el, utw_basis_store *store, utw_map *map,
+                           utw_error *err)
+{
+    const utw_table *t = map->table = utw_basis_table(store, utw_element_points(el));
+    if (t == NULL) return utw_fail(err, UTW_E_NOMEM, "out of memory (%s)", __func__);
+    for (int k = 0; k < t->n_point; k++) {
+        double *J = map->J[k];
+        utw_blend_at(&el->blend, t->r[k], t->s[k], map->xy[k], J);
+        map->det[k] = J[0] * J[3] - J[1] * J[2];
+    }
     return UTW_OK;
 }
 
-utw_status utw_element_stiffness(const utw_element *el, utw_basis_store *store, double *K,
-                                 double *work, utw_error *err)
+utw_status utw_element_stiffness(const utw_element *el, utw_basis_store *store, const utw_map *map,
+                                 double *K, double *work, utw_error *err)
 {
-    return el->blend.any ? curved_stiffness(el, store, K, work, err)
-                         : straight_stiffness(el, store, K, err);
+    if (!el->blend.any) return straight_stiffness(el, store, K, err);
+    curved_stiffness(el, map, K, work);
+    return UTW_OK;
 }
 
-/* The loads as densities of Nr, Ns and N on the reference triangle: g . J^-T (Nr, Ns) det + s N
- * det. */
-static void densities(int n_load, const utw_poly (*g)[2], const utw_poly *s, const double xy[2],
-                      const double J[4], double (*d)[3])
+enum { LOADS_MAX = 2 * UTW_PAIR_MAX };
+
+/* Loads as densities of Nr, Ns and N on the reference triangle: d[0], d[1] of g . J^-T (Nr, Ns) det
+ * and d[2] of s N det, each [n_load] with stride `stride`. */
+static void densities(int n_load, const utw_poly (*g)[2], int n_source, const utw_poly *s,
+                      const double xy[2], const double J[4], double *const d[3], int stride)
 {
     const double det = J[0] * J[3] - J[1] * J[2];
     for (int c = 0; c < n_load; c++) {
         const double gx = utw_poly_at(g[c][0], xy[0], xy[1]),
                      gy = utw_poly_at(g[c][1], xy[0], xy[1]);
-        d[c][0] = gx * J[3] - gy * J[1];
-        d[c][1] = gy * J[0] - gx * J[2];
-        d[c][2] = s == NULL ? 0 : utw_poly_at(s[c], xy[0], xy[1]) * det;
+        d[0][c * stride] = gx * J[3] - gy * J[1];
+        d[1][c * stride] = gy * J[0] - gx * J[2];
+        if (c < n_source) d[2][c * stride] = utw_poly_at(s[c], xy[0], xy[1]) * det;
     }
 }
 
 /* On a straight triangle the densities are quadratic: six values and the reference moments do. */
 static utw_status straight_loads(const utw_element *el, utw_basis_store *store, int n_load,
-                                 const utw_poly (*g)[2], const utw_poly *s, double *F,
+                                 const utw_poly (*g)[2], int n_source, const utw_poly *s, double *F,
                                  utw_error *err)
 {
     static const double at[6][2] = {{0, 0}, {1, 0}, {0, 1}, {0.5, 0}, {0.5, 0.5}, {0, 0.5}};
     const utw_reference *f = utw_basis_reference(store, el->top);
     if (f == NULL) return utw_fail(err, UTW_E_NOMEM, "out of memory (%s)", __func__);
-    double d[6][UTW_PAIR_MAX][3];
+    double d[3][LOADS_MAX][6];
     for (int k = 0; k < 6; k++) {
-        double xy[2], J[4];
+        double xy[2], J[4], *const at_k[3] = {&d[0][0][k], &d[1][0][k], &d[2][0][k]};
         utw_blend_at(&el->blend, at[k][0], at[k][1], xy, J);
-        densities(n_load, g, s, xy, J, d[k]);
+        densities(n_load, g, n_source, s, xy, J, at_k, 6);
     }
     int index[UTW_FUNCTIONS_MAX];
     utw_element_index(el, el->top, index);
@@ -162,41 +175,48 @@ static utw_status straight_loads(const utw_element *el, utw_basis_store *store, 
             double sum = 0;
             for (int k = 0; k < 6; k++) {
                 const int m = k * f->n + index[i];
-                sum += d[k][c][0] * f->Mr[m] + d[k][c][1] * f->Ms[m];
-                if (s != NULL) sum += d[k][c][2] * f->M0[m];
+                sum += d[0][c][k] * f->Mr[m] + d[1][c][k] * f->Ms[m];
+                if (c < n_source) sum += d[2][c][k] * f->M0[m];
             }
             F[c * el->n + i] = el->sign[i] * sum;
         }
     return UTW_OK;
 }
 
-static utw_status curved_loads(const utw_element *el, utw_basis_store *store, int n_load,
-                               const utw_poly (*g)[2], const utw_poly *s, double *F, utw_error *err)
+static void curved_loads(const utw_element *el, const utw_map *map, int n_load,
+                         const utw_poly (*g)[2], int n_source, const utw_poly *s, double *F,
+                         double *work)
 {
-    const utw_table *t = utw_basis_table(store, utw_element_points(el));
-    if (t == NULL) return utw_fail(err, UTW_E_NOMEM, "out of memory (%s)", __func__);
+    const utw_table *t = map->table;
+    const int np = t->n_point, nf = t->n_function;
+    double *d[3] = {work, work + n_load * np, work + 2 * n_load * np},
+           *full = work + 3 * n_load * np;
+    for (int k = 0; k < np; k++) {
+        double *const at_k[3] = {d[0] + k, d[1] + k, d[2] + k};
+        densities(n_load, g, n_source, s, map->xy[k], map->J[k], at_k, np);
+        for (int c = 0; c < n_load; c++) {
+            d[0][c * np + k] *= t->w[k];
+            d[1][c * np + k] *= t->w[k];
+            if (c < n_source) d[2][c * np + k] *= t->w[k];
+        }
+    }
+    cblas_dgemm(CblasRowMajor, CblasNoTrans, CblasNoTrans, n_load, nf, np, 1, d[0], np, t->Nr, nf,
+                0, full, nf);
+    cblas_dgemm(CblasRowMajor, CblasNoTrans, CblasNoTrans, n_load, nf, np, 1, d[1], np, t->Ns, nf,
+                1, full, nf);
+    cblas_dgemm(CblasRowMajor, CblasNoTrans, CblasNoTrans, n_source, nf, np, 1, d[2], np, t->N, nf,
+                1, full, nf);
     int index[UTW_FUNCTIONS_MAX];
     utw_element_index(el, t->order, index);
-    memset(F, 0, (size_t)(n_load * el->n) * sizeof *F);
-    for (int k = 0; k < t->n_point; k++) {
-        double xy[2], J[4], d[UTW_PAIR_MAX][3];
-        utw_blend_at(&el->blend, t->r[k], t->s[k], xy, J);
-        densities(n_load, g, s, xy, J, d);
-        const double *N = t->N + k * t->n_function, *Nr = t->Nr + k * t->n_function,
-                     *Ns = t->Ns + k * t->n_function;
-        for (int c = 0; c < n_load; c++)
-            for (int i = 0; i < el->n; i++) {
-                const int m = index[i];
-                F[c * el->n + i] +=
-                    el->sign[i] * t->w[k] * (d[c][0] * Nr[m] + d[c][1] * Ns[m] + d[c][2] * N[m]);
-            }
-    }
-    return UTW_OK;
+    for (int c = 0; c < n_load; c++)
+        for (int i = 0; i < el->n; i++) F[c * el->n + i] = el->sign[i] * full[c * nf + index[i]];
 }
 
-utw_status utw_element_loads(const utw_element *el, utw_basis_store *store, int n_load,
-                             const utw_poly (*g)[2], const utw_poly *s, double *F, utw_error *err)
+utw_status utw_element_loads(const utw_element *el, utw_basis_store *store, const utw_map *map,
+                             int n_load, const utw_poly (*g)[2], int n_source, const utw_poly *s,
+                             double *F, double *work, utw_error *err)
 {
-    return el->blend.any ? curved_loads(el, store, n_load, g, s, F, err)
-                         : straight_loads(el, store, n_load, g, s, F, err);
+    if (!el->blend.any) return straight_loads(el, store, n_load, g, n_source, s, F, err);
+    curved_loads(el, map, n_load, g, n_source, s, F, work);
+    return UTW_OK;
 }

@@ -32,14 +32,30 @@ void utw_element_index(const utw_element *element, int p, int *index);
  * squares of values. */
 int utw_element_points(const utw_element *element);
 
-/** Stiffness int grad Ni . grad Nj, K[n][n], signs applied. work holds 2 UTW_POINTS_MAX^2
- * UTW_FUNCTIONS_MAX doubles. UTW_E_NOMEM. */
-utw_status utw_element_stiffness(const utw_element *element, utw_basis_store *store, double *K,
-                                 double *work, utw_error *err);
+/** The map of an element at the points of its table: place, derivatives {x_r, x_s, y_r, y_s} and
+ * their determinant. */
+typedef struct utw_map {
+    const utw_table *table;
+    double xy[UTW_POINTS_MAX * UTW_POINTS_MAX][2], J[UTW_POINTS_MAX * UTW_POINTS_MAX][4];
+    double det[UTW_POINTS_MAX * UTW_POINTS_MAX];
+} utw_map;
 
-/** Load vectors int (g . grad Ni + s Ni): F[n_load][n], signs applied. g[2 n_load], s[n_load]
- * polynomials (s may be NULL). UTW_E_NOMEM. */
-utw_status utw_element_loads(const utw_element *element, utw_basis_store *store, int n_load,
-                             const utw_poly (*g)[2], const utw_poly *s, double *F, utw_error *err);
+/** Fill the map. UTW_E_NOMEM when the table cannot be made. */
+utw_status utw_element_map(const utw_element *element, utw_basis_store *store, utw_map *map,
+                           utw_error *err);
+
+/** Doubles of scratch that the functions below need. */
+#define UTW_ELEMENT_WORK (2 * UTW_POINTS_MAX * UTW_POINTS_MAX * UTW_FUNCTIONS_MAX)
+
+/** Stiffness int grad Ni . grad Nj, K[n][n], signs applied. work[UTW_ELEMENT_WORK]. UTW_E_NOMEM. */
+utw_status utw_element_stiffness(const utw_element *element, utw_basis_store *store,
+                                 const utw_map *map, double *K, double *work, utw_error *err);
+
+/** Load vectors int (g . grad Ni + s Ni): F[n_load][n], signs applied. g[n_load][2] polynomials;
+ * s[n_source] for the first n_source <= n_load loads, the others have none. work[UTW_ELEMENT_WORK].
+ * UTW_E_NOMEM. */
+utw_status utw_element_loads(const utw_element *element, utw_basis_store *store, const utw_map *map,
+                             int n_load, const utw_poly (*g)[2], int n_source, const utw_poly *s,
+                             double *F, double *work, utw_error *err);
 
 #endif

@@ -31,7 +31,8 @@ typedef struct utw_field_times {
 typedef struct utw_field {
     utw_setting setting;
     unsigned char *order;      /* [n_tri], owned */
-    unsigned char *side_order; /* [n_edge]: the greater of the two elements'; owned */
+    unsigned char *side_order; /* [n_edge]: the smaller of the two elements', but 3 at least where
+                                  boundary data need it; owned */
     size_t *first;             /* [n_tri + 1], owned */
     double *coef;              /* owned */
     int n_free, n_skeleton_free,

@@ -22,7 +22,7 @@ void utw_lift_free(utw_lift *lift)
 }
 
 int utw_lift_rest(const utw_lift *lift, const utw_mesh *mesh, const utw_element *el, double r,
-                  double s, double (*d)[2])
+                  double s, const double *phi, const double *dphi, double (*d)[2])
 {
     static const double lr[3] = {-1, 1, 0}, ls[3] = {-1, 0, 1};
     const utw_triangle *t = &mesh->tri[el->tri];
@@ -35,20 +35,22 @@ int utw_lift_rest(const utw_lift *lift, const utw_mesh *mesh, const utw_element 
             for (int c = 0; c < lift->n_column; c++) d[c][0] = d[c][1] = 0;
         any = 1;
         const int a = k, b = (k + 1) % 3, backward = t->node[a] > t->node[b];
-        double phi[TERMS], dphi[TERMS];
-        utw_edge_kernels(lift->degree[row], l[b] - l[a], phi, dphi);
+        double own[2][TERMS];
+        const double *f = phi == NULL ? own[0] : phi + k * TERMS,
+                     *df = phi == NULL ? own[1] : dphi + k * TERMS;
+        if (phi == NULL) utw_edge_kernels(lift->degree[row], l[b] - l[a], own[0], own[1]);
         const double product = l[a] * l[b], xr = lr[b] - lr[a], xs = ls[b] - ls[a];
         const double pr = lr[a] * l[b] + l[a] * lr[b], ps = ls[a] * l[b] + l[a] * ls[b];
         for (int c = 0; c < lift->n_column; c++) {
             const double *coef = lift->series + (size_t)(row * lift->n_column + c) * TERMS;
-            double f = 0, df = 0;
+            double sum = 0, slope = 0;
             for (int m = el->side_order[k] + 1; m <= lift->degree[row]; m++) {
                 const double q = backward && m % 2 == 1 ? -coef[m - 2] : coef[m - 2];
-                f += q * phi[m - 2];
-                df += q * dphi[m - 2];
+                sum += q * f[m - 2];
+                slope += q * df[m - 2];
             }
-            d[c][0] += pr * f + product * df * xr;
-            d[c][1] += ps * f + product * df * xs;
+            d[c][0] += pr * sum + product * slope * xr;
+            d[c][1] += ps * sum + product * slope * xs;
         }
     }
     return any;
@@ -90,11 +92,10 @@ static void side_at(const boundary_side *s, double u, double xy[2], double d[2])
 /* d chi/du = -(P . n) ds/du = P_y x' - P_x y', expanded in Legendre polynomials c_0 .. c_{degree-1}
  * of 2u-1 by a rule that is exact for the products kept. Returns c_0, the increment of chi over the
  * side. */
-static double expand(const boundary_side *s, const utw_pair *pair, int degree, int backward,
-                     double *series)
+static double expand(const boundary_side *s, const utw_pair *pair, const double *x, const double *w,
+                     int degree, int backward, double *series)
 {
-    double x[RULE], w[RULE], c[UTW_SERIES_MAX] = {0};
-    utw_gauss(RULE, x, w);
+    double c[UTW_SERIES_MAX] = {0};
     for (int q = 0; q < RULE; q++) {
         double xy[2], d[2];
         side_at(s, x[q], xy, d);
@@ -118,6 +119,19 @@ static double expand(const boundary_side *s, const utw_pair *pair, int degree, i
     return c[0];
 }
 
+/* Terms at the end of a curved side's series that are only rounding are dropped. */
+static int degree_needed(const utw_lift *l, int row)
+{
+    double greatest = 0;
+    const double *series = l->series + (size_t)(row * l->n_column) * TERMS;
+    for (int i = 0; i < l->n_column * TERMS; i++) greatest = fmax(greatest, fabs(series[i]));
+    int degree = UTW_SERIES_MAX;
+    for (; degree > 3; degree--)
+        for (int c = 0; c < l->n_column; c++)
+            if (fabs(series[c * TERMS + degree - 2]) > 1e-15 * greatest) return degree;
+    return degree;
+}
+
 /* Series of all boundary sides; step[row][column] is the increment along the side in its triangle's
  * direction. */
 static utw_status expand_sides(utw_lift *l, const utw_mesh *mesh, int n_pair, const utw_pair *pair,
@@ -125,6 +139,8 @@ static utw_status expand_sides(utw_lift *l, const utw_mesh *mesh, int n_pair, co
 {
     utw_status st = UTW_E_INTERNAL;
     int rows = 0;
+    double x[RULE], w[RULE];
+    utw_gauss(RULE, x, w);
     for (int e = 0; e < mesh->n_edge; e++) l->series_of[e] = mesh->edge[e].tri[1] < 0 ? rows++ : -1;
     UTW_TRY_ALLOC(l->degree = utw_alloc((size_t)rows, sizeof(int)));
     UTW_TRY_ALLOC(l->series = utw_alloc((size_t)(rows * l->n_column) * TERMS, sizeof(double)));
@@ -140,9 +156,10 @@ static utw_status expand_sides(utw_lift *l, const utw_mesh *mesh, int n_pair, co
             const int c = l->column[i];
             if (c < 0) continue;
             (*step)[row * l->n_column + c] =
-                expand(&s, &pair[i], l->degree[row], backward,
+                expand(&s, &pair[i], x, w, l->degree[row], backward,
                        l->series + (size_t)(row * l->n_column + c) * TERMS);
         }
+        if (s.curve != NULL) l->degree[row] = degree_needed(l, row);
     }
     st = UTW_OK;
 done:

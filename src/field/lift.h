@@ -7,8 +7,6 @@
 #include "field/element.h"
 #include "mesh/rim.h"
 
-#define UTW_SERIES_TERMS (UTW_SERIES_MAX - 1) /* edge functions of degree 2 .. UTW_SERIES_MAX */
-
 /** For the balanced pairs only, numbered 0 .. n_column-1 in the order of the pairs. A series holds
  * the coefficients of the edge functions k = 2 .. degree of a boundary side, run from its lower to
  * its higher node; a straight side needs degree 3, a curved one up to UTW_SERIES_MAX (to rounding
@@ -31,8 +29,10 @@ utw_status utw_lift_create(const utw_mesh *mesh, const utw_rim *rim, int n_pair,
 void utw_lift_free(utw_lift *lift);
 
 /** Derivatives by r and s of the boundary data beyond the orders of the element's sides, at one
- * point: d[n_column][2]. Returns 0, with nothing written, when the element has no such data. */
+ * point: d[n_column][2]. phi, dphi: [3][UTW_SERIES_TERMS] edge kernels of the sides there, from a
+ * table, or NULL to have them made. Returns 0, with nothing written, when the element has no such
+ * data. */
 int utw_lift_rest(const utw_lift *lift, const utw_mesh *mesh, const utw_element *element, double r,
-                  double s, double (*d)[2]);
+                  double s, const double *phi, const double *dphi, double (*d)[2]);
 
 #endif

@@ -34,14 +34,14 @@ static double conductivity(const utw_field *f, int tri)
 }
 
 static void transform(const utw_field *f, const utw_element *el, const double xy[2],
-                      const double J[4], double r, double s, const double *dr, const double *ds,
-                      point_values *v)
+                      const double J[4], double r, double s, const double *phi, const double *dphi,
+                      const double *dr, const double *ds, point_values *v)
 {
     const utw_setting *set = &f->setting;
     const int np = set->n_pair;
     const double det = J[0] * J[3] - J[1] * J[2], k = conductivity(f, el->tri);
     double rest[UTW_PAIR_MAX][2];
-    const int any = utw_lift_rest(set->lift, set->mesh, el, r, s, rest);
+    const int any = utw_lift_rest(set->lift, set->mesh, el, r, s, phi, dphi, rest);
     for (int i = 0; i < np; i++) {
         const utw_pair *pair = &set->pair[i];
         const double Px = k * utw_poly_at(pair->P[0], xy[0], xy[1]),
@@ -77,15 +77,18 @@ static void accumulate(const point_values *v, int np, double weight, utw_measure
 
 typedef struct scratch {
     double *C, *dr, *ds, *u;
+    utw_map map;
 } scratch;
 
 static utw_status measure_element(const utw_field *f, const utw_element *el, scratch *w,
                                   utw_measures *m, double *peak, utw_error *err)
 {
-    const utw_table *t = utw_basis_table(f->setting.store, utw_element_points(el));
-    if (t == NULL) return utw_fail(err, UTW_E_NOMEM, "out of memory (%s)", __func__);
+    const utw_status st = utw_element_map(el, f->setting.store, &w->map, err);
+    if (st != UTW_OK) return st;
+    const utw_table *t = w->map.table;
     const int np = f->setting.n_pair, c = 2 * np, nf = t->n_function;
     const double k = conductivity(f, el->tri);
+    double greatest = 0;
     spread(f, el, t->order, w->C);
     cblas_dgemm(CblasRowMajor, CblasNoTrans, CblasTrans, t->n_point, c, nf, 1, t->Nr, nf, w->C, nf,
                 0, w->dr, c);
@@ -94,20 +97,22 @@ static utw_status measure_element(const utw_field *f, const utw_element *el, scr
     cblas_dgemm(CblasRowMajor, CblasNoTrans, CblasTrans, t->n_point, np, nf, 1, t->N, nf, w->C, nf,
                 0, w->u, np);
     for (int q = 0; q < t->n_point; q++) {
-        double xy[2], J[4];
         point_values v;
-        utw_blend_at(&el->blend, t->r[q], t->s[q], xy, J);
-        const double dA = t->w[q] * (J[0] * J[3] - J[1] * J[2]);
-        transform(f, el, xy, J, t->r[q], t->s[q], w->dr + q * c, w->ds + q * c, &v);
+        const double dA = t->w[q] * w->map.det[q];
+        transform(f, el, w->map.xy[q], w->map.J[q], t->r[q], t->s[q],
+                  t->phi + q * 3 * UTW_SERIES_TERMS, t->dphi + q * 3 * UTW_SERIES_TERMS,
+                  w->dr + q * c, w->ds + q * c, &v);
         accumulate(&v, np, dA / k, m);
-        *peak = fmax(*peak, hypot(0.5 * (v.p[0][0] + v.q[0][0]) - v.pi[0][0],
-                                  0.5 * (v.p[0][1] + v.q[0][1]) - v.pi[0][1]));
+        const double sx = 0.5 * (v.p[0][0] + v.q[0][0]) - v.pi[0][0],
+                     sy = 0.5 * (v.p[0][1] + v.q[0][1]) - v.pi[0][1];
+        greatest = fmax(greatest, sx * sx + sy * sy);
         m->area += dA;
         for (int i = 0; i < np; i++) {
             m->mean[i] += dA * w->u[q * np + i];
             m->product[i] += dA * w->u[q * np + i] * w->u[q * np];
         }
     }
+    *peak = sqrt(greatest);
     return UTW_OK;
 }
 
@@ -131,7 +136,7 @@ utw_status utw_field_measure(const utw_field *f, utw_measures *measures, double 
     utw_status st = UTW_E_INTERNAL;
     const int np = f->setting.n_pair;
     const size_t points = UTW_POINTS_MAX * UTW_POINTS_MAX, columns = 2 * (size_t)np;
-    scratch w = {NULL, NULL, NULL, NULL};
+    scratch w = {.C = NULL};
     utw_measures total;
     memset(&total, 0, sizeof total);
     UTW_TRY_ALLOC(w.C = utw_alloc(columns * UTW_FUNCTIONS_MAX, sizeof(double)));
@@ -190,7 +195,7 @@ void utw_field_at(const utw_field *f, int t, double r, double s, double xy[2], d
         }
         if (u != NULL && i < np) u[i] = value;
     }
-    transform(f, &el, xy, J, r, s, dr, ds, &v);
+    transform(f, &el, xy, J, r, s, NULL, NULL, dr, ds, &v);
     if (p != NULL) memcpy(p, v.p, (size_t)np * sizeof *p);
     if (q != NULL) memcpy(q, v.q, (size_t)np * sizeof *q);
 }

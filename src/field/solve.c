@@ -26,7 +26,9 @@ typedef struct solver {
     condensed *element;    /* [n_tri] */
     double *kept;
     size_t n_kept, capacity;
+    utw_poly load[2 * UTW_PAIR_MAX][2], source[UTW_PAIR_MAX];
     /* of the element at hand */
+    utw_map map;
     double *K, *F, *work, *known;
 } solver;
 
@@ -140,18 +142,19 @@ static int boundary_data(const solver *s, const utw_element *el, double *known)
 
 /* Boundary data of curved sides beyond the element's order: F -= int grad(rest) . grad N by
  * quadrature. */
-static utw_status subtract_rest(const solver *s, const utw_element *el, double *F, utw_error *err)
+static void subtract_rest(const solver *s, const utw_element *el, double *F)
 {
-    const utw_table *t = utw_basis_table(s->set->store, utw_element_points(el));
-    if (t == NULL) return utw_fail(err, UTW_E_NOMEM, "out of memory (%s)", __func__);
+    const utw_map *map = &s->map;
+    const utw_table *t = map->table;
     int index[UTW_FUNCTIONS_MAX];
     utw_element_index(el, t->order, index);
     double d[UTW_PAIR_MAX][2];
     for (int k = 0; k < t->n_point; k++) {
-        if (!utw_lift_rest(s->set->lift, s->set->mesh, el, t->r[k], t->s[k], d)) return UTW_OK;
-        double xy[2], J[4];
-        utw_blend_at(&el->blend, t->r[k], t->s[k], xy, J);
-        const double det = J[0] * J[3] - J[1] * J[2];
+        if (!utw_lift_rest(s->set->lift, s->set->mesh, el, t->r[k], t->s[k],
+                           t->phi + k * 3 * UTW_SERIES_TERMS, t->dphi + k * 3 * UTW_SERIES_TERMS,
+                           d))
+            return;
+        const double *J = map->J[k], det = map->det[k];
         const double *Nr = t->Nr + k * t->n_function, *Ns = t->Ns + k * t->n_function;
         for (int i = 0; i < n_pairs(s); i++) {
             const int c = s->set->lift->column[i];
@@ -165,7 +168,21 @@ static utw_status subtract_rest(const solver *s, const utw_element *el, double *
                 F[i * el->n + j] -= el->sign[j] * (fr * Nr[index[j]] + fs * Ns[index[j]]);
         }
     }
-    return UTW_OK;
+}
+
+/* The loads of potentials, then those of chi, -(P, curl v) = int P_y v_x - P_x v_y. */
+static void collect_loads(solver *s)
+{
+    const int np = n_pairs(s);
+    for (int i = 0; i < np; i++) {
+        const utw_pair *pair = &s->set->pair[i];
+        memcpy(s->load[i], pair->g, sizeof pair->g);
+        memcpy(s->source[i], pair->s, sizeof pair->s);
+        for (int j = 0; j < 6; j++) {
+            s->load[np + i][0][j] = pair->P[1][j];
+            s->load[np + i][1][j] = -pair->P[0][j];
+        }
+    }
 }
 
 /* K, and F[2 n_pair][n] with the boundary data of chi brought to the right-hand side. */
@@ -173,25 +190,14 @@ static utw_status make_element(solver *s, const utw_element *el, utw_error *err)
 {
     utw_status st = UTW_E_INTERNAL;
     const int np = n_pairs(s), n = el->n;
-    utw_poly load[UTW_PAIR_MAX][2], source[UTW_PAIR_MAX], turned[UTW_PAIR_MAX][2];
-    for (int i = 0; i < np; i++) {
-        const utw_pair *pair = &s->set->pair[i];
-        memcpy(load[i], pair->g, sizeof pair->g);
-        memcpy(source[i], pair->s, sizeof pair->s);
-        for (int j = 0; j < 6; j++) { /* -(P, curl v) = int P_y v_x - P_x v_y */
-            turned[i][0][j] = pair->P[1][j];
-            turned[i][1][j] = -pair->P[0][j];
-        }
-    }
-    UTW_TRY(utw_element_stiffness(el, s->set->store, s->K, s->work, err));
-    UTW_TRY(utw_element_loads(el, s->set->store, np, (const utw_poly(*)[2])load,
-                              (const utw_poly *)source, s->F, err));
-    UTW_TRY(utw_element_loads(el, s->set->store, np, (const utw_poly(*)[2])turned, NULL,
-                              s->F + np * n, err));
+    if (el->blend.any) UTW_TRY(utw_element_map(el, s->set->store, &s->map, err));
+    UTW_TRY(utw_element_stiffness(el, s->set->store, &s->map, s->K, s->work, err));
+    UTW_TRY(utw_element_loads(el, s->set->store, &s->map, 2 * np, (const utw_poly(*)[2])s->load, np,
+                              (const utw_poly *)s->source, s->F, s->work, err));
     if (boundary_data(s, el, s->known)) {
         cblas_dgemm(CblasRowMajor, CblasNoTrans, CblasNoTrans, np, n, n, -1, s->known, n, s->K, n,
                     1, s->F + np * n, n);
-        UTW_TRY(subtract_rest(s, el, s->F + np * n, err));
+        if (el->blend.any) subtract_rest(s, el, s->F + np * n);
     }
     st = UTW_OK;
 done:
@@ -359,7 +365,7 @@ static utw_status set_orders(utw_field *f, const unsigned char *order, utw_error
         const int *tri = mesh->edge[e].tri, a = order[tri[0]];
         /* a boundary side must hold its cubic data; the potential gains a little by it */
         const int b = tri[1] >= 0 ? order[tri[1]] : data;
-        f->side_order[e] = (unsigned char)(a > b ? a : b);
+        f->side_order[e] = (unsigned char)(tri[1] < 0 ? (a > b ? a : b) : a < b ? a : b);
     }
     int vertices = mesh->n_node - 1, sides = 0, inner = 0;
     for (int e = 0; e < mesh->n_edge; e++) sides += f->side_order[e] - 1;
@@ -402,7 +408,7 @@ static utw_status create_work(solver *s, utw_error *err)
     UTW_TRY_ALLOC(s->K = utw_alloc(n * n, sizeof(double)));
     UTW_TRY_ALLOC(s->F = utw_alloc(2 * UTW_PAIR_MAX * n, sizeof(double)));
     UTW_TRY_ALLOC(s->known = utw_alloc(UTW_PAIR_MAX * n, sizeof(double)));
-    UTW_TRY_ALLOC(s->work = utw_alloc(2 * UTW_POINTS_MAX * UTW_POINTS_MAX * n, sizeof(double)));
+    UTW_TRY_ALLOC(s->work = utw_alloc(UTW_ELEMENT_WORK, sizeof(double)));
     st = UTW_OK;
 done:
     return st;
@@ -433,6 +439,7 @@ utw_status utw_field_solve(const utw_setting *setting, const unsigned char *orde
     s.field = f;
     UTW_TRY(set_orders(f, order, err));
     UTW_TRY(create_work(&s, err));
+    collect_loads(&s);
     for (int which = FREE; which <= CLAMPED; which++) UTW_TRY(create_system(&s, which, err));
     f->n_skeleton_clamped = utw_system_size(s.system[CLAMPED]);
     double mark = utw_seconds();

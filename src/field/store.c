@@ -1,6 +1,8 @@
 /* SPDX-License-Identifier: GPL-3.0-or-later
  * Tables of the shape functions at quadrature points and the matrices of straight-sided elements.
  */
+#include <cblas.h>
+
 #include "base/gauss.h"
 #include "base/memory.h"
 #include "base/status.h"
@@ -20,6 +22,8 @@ static void table_free(utw_table *t)
     utw_free(t->N);
     utw_free(t->Nr);
     utw_free(t->Ns);
+    utw_free(t->phi);
+    utw_free(t->dphi);
     utw_free(t);
 }
 
@@ -66,7 +70,9 @@ static utw_table *table_create(int q)
     t->N = utw_alloc(all, sizeof(double));
     t->Nr = utw_alloc(all, sizeof(double));
     t->Ns = utw_alloc(all, sizeof(double));
-    if (!t->r || !t->s || !t->w || !t->N || !t->Nr || !t->Ns) {
+    t->phi = utw_alloc(points * 3 * UTW_SERIES_TERMS, sizeof(double));
+    t->dphi = utw_alloc(points * 3 * UTW_SERIES_TERMS, sizeof(double));
+    if (!t->r || !t->s || !t->w || !t->N || !t->Nr || !t->Ns || !t->phi || !t->dphi) {
         table_free(t);
         return NULL;
     }
@@ -80,6 +86,12 @@ static utw_table *table_create(int q)
             t->r[k] = x[i] * (1 - x[j]);
             t->w[k] = w[i] * w[j] * (1 - x[j]);
             utw_basis(t->order, t->r[k], t->s[k], t->N + row, t->Nr + row, t->Ns + row);
+            const double l[3] = {1 - t->r[k] - t->s[k], t->r[k], t->s[k]};
+            for (int e = 0; e < 3; e++) {
+                double *phi = t->phi + (3 * k + e) * UTW_SERIES_TERMS;
+                utw_edge_kernels(UTW_SERIES_MAX, l[(e + 1) % 3] - l[e], phi,
+                                 t->dphi + (phi - t->phi));
+            }
         }
     return t;
 }
@@ -102,36 +114,51 @@ static void quadratic(double r, double s, double L[6])
     L[5] = 4 * s * l0;
 }
 
-/* Degree of the integrands: 2(p-1) for R, p+2 for M0: p+1 points a direction do for p >= 2, three
- * for p = 1. */
-static void reference_fill(utw_reference *f, const utw_table *t)
+/* out[n][n] = A^T B for A, B [n_point][stride], of which the first n columns count. */
+static void product(const double *A, const double *B, int n_point, int stride, int n, double *out)
 {
-    const int n = f->n;
-    for (int k = 0; k < t->n_point; k++) {
-        double N[UTW_FUNCTIONS_MAX], Nr[UTW_FUNCTIONS_MAX], Ns[UTW_FUNCTIONS_MAX], L[6];
-        utw_basis(f->p, t->r[k], t->s[k], N, Nr, Ns);
-        quadratic(t->r[k], t->s[k], L);
-        for (int a = 0; a < n; a++) {
-            const double wr = t->w[k] * Nr[a], ws = t->w[k] * Ns[a];
-            double *R11 = f->R11 + a * n, *R12 = f->R12 + a * n, *R22 = f->R22 + a * n;
-            for (int b = 0; b <= a; b++) {
-                R11[b] += wr * Nr[b];
-                R12[b] += wr * Ns[b] + ws * Nr[b];
-                R22[b] += ws * Ns[b];
-            }
-            for (int j = 0; j < 6; j++) {
-                f->Mr[j * n + a] += wr * L[j];
-                f->Ms[j * n + a] += ws * L[j];
-                f->M0[j * n + a] += t->w[k] * N[a] * L[j];
-            }
+    cblas_dgemm(CblasRowMajor, CblasTrans, CblasNoTrans, n, n, n_point, 1, A, stride, B, stride, 0,
+                out, n);
+}
+
+/* Degree of the integrands: 2(p-1) for R, p+2 for M0: p+1 points a direction do for p >= 2, three
+ * for p = 1. The functions of order p come first in the table: it has order p, or for p = 1 order
+ * 2, where the vertices come first. */
+static utw_status reference_fill(utw_reference *f, const utw_table *t)
+{
+    const int n = f->n, nf = t->n_function, points = t->n_point;
+    double *weighted = utw_alloc(2 * (size_t)(points * nf), sizeof(double)),
+           *L = utw_alloc(6 * (size_t)points, sizeof(double));
+    if (weighted == NULL || L == NULL) {
+        utw_free(weighted);
+        utw_free(L);
+        return UTW_E_NOMEM;
+    }
+    double *Wr = weighted, *Ws = weighted + points * nf;
+    for (int k = 0; k < points; k++) {
+        quadratic(t->r[k], t->s[k], L + 6 * k);
+        for (int a = 0; a < nf; a++) {
+            Wr[k * nf + a] = t->w[k] * t->Nr[k * nf + a];
+            Ws[k * nf + a] = t->w[k] * t->Ns[k * nf + a];
         }
     }
+    product(Wr, t->Nr, points, nf, n, f->R11);
+    product(Wr, t->Ns, points, nf, n, f->R12);
+    product(Ws, t->Ns, points, nf, n, f->R22);
     for (int a = 0; a < n; a++)
-        for (int b = 0; b < a; b++) {
-            f->R11[b * n + a] = f->R11[a * n + b];
-            f->R12[b * n + a] = f->R12[a * n + b];
-            f->R22[b * n + a] = f->R22[a * n + b];
-        }
+        for (int b = 0; b <= a; b++)
+            f->R12[a * n + b] = f->R12[b * n + a] = f->R12[a * n + b] + f->R12[b * n + a];
+    cblas_dgemm(CblasRowMajor, CblasTrans, CblasNoTrans, 6, n, points, 1, L, 6, Wr, nf, 0, f->Mr,
+                n);
+    cblas_dgemm(CblasRowMajor, CblasTrans, CblasNoTrans, 6, n, points, 1, L, 6, Ws, nf, 0, f->Ms,
+                n);
+    for (int k = 0; k < points; k++)
+        for (int a = 0; a < nf; a++) Wr[k * nf + a] = t->w[k] * t->N[k * nf + a];
+    cblas_dgemm(CblasRowMajor, CblasTrans, CblasNoTrans, 6, n, points, 1, L, 6, Wr, nf, 0, f->M0,
+                n);
+    utw_free(weighted);
+    utw_free(L);
+    return UTW_OK;
 }
 
 const utw_reference *utw_basis_reference(utw_basis_store *store, int p)
@@ -152,11 +179,11 @@ const utw_reference *utw_basis_reference(utw_basis_store *store, int p)
     f->Mr = utw_alloc(6 * n, sizeof(double));
     f->Ms = utw_alloc(6 * n, sizeof(double));
     f->M0 = utw_alloc(6 * n, sizeof(double));
-    if (!f->R11 || !f->R12 || !f->R22 || !f->Mr || !f->Ms || !f->M0) {
+    if (!f->R11 || !f->R12 || !f->R22 || !f->Mr || !f->Ms || !f->M0 ||
+        reference_fill(f, t) != UTW_OK) {
         reference_free(f);
         return NULL;
     }
-    reference_fill(f, t);
     store->reference[p] = f;
     return f;
 }

@@ -4,9 +4,18 @@
 
 #include "base/vec2.h"
 
+static double turning(const utw_blend *b, int k)
+{
+    double d0[2], d1[2];
+    utw_curve_d1(b->curve[k], b->t0[k], d0);
+    utw_curve_d1(b->curve[k], b->t1[k], d1);
+    return fabs(atan2(utw_cross(d0, d1), utw_dot(d0, d1)));
+}
+
 void utw_blend_of(const utw_mesh *mesh, const utw_triangle *tri, utw_blend *b)
 {
     b->any = 0;
+    b->turning = 0;
     for (int k = 0; k < 3; k++) {
         b->x[k][0] = mesh->xy[tri->node[k]][0];
         b->x[k][1] = mesh->xy[tri->node[k]][1];
@@ -15,6 +24,7 @@ void utw_blend_of(const utw_mesh *mesh, const utw_triangle *tri, utw_blend *b)
         b->t0[k] = tri->t[k][0];
         b->t1[k] = tri->t[k][1];
         b->any |= b->curved[k];
+        if (b->curved[k]) b->turning = fmax(b->turning, turning(b, k));
     }
 }
 

@@ -14,6 +14,7 @@ typedef struct utw_blend {
     const utw_curve *curve[3]; /* borrowed from the net */
     double t0[3], t1[3];       /* parameters at the side's start and end */
     int any;                   /* 1 when a side is curved */
+    double turning;            /* greatest angle between the tangents at the ends of a side [rad] */
 } utw_blend;
 
 void utw_blend_of(const utw_mesh *mesh, const utw_triangle *tri, utw_blend *blend);

@@ -11,7 +11,7 @@
 
 /* A side per so many wall thicknesses. The study of grading and order on five profiles found 1
  * to 1.5 to be cheapest. */
-#define SIDE_PER_WALL 1.25
+#define SIDE_PER_WALL 1.5
 /* In a wedge, length over distance from the tip: a span from the tip on is never halved for the
  * wedge's sake (its first sample lies at a sixth of it, and it may be twice the size). */
 #define WEDGE 2.5

@@ -13,7 +13,7 @@ typedef struct utw_division {
     double *t;  /* [first[n_edge]], owned */
 } utw_division;
 
-/** Divide so that a side is at most about 1.25 scale times the local wall thickness, turns by at
+/** Divide so that a side is at most about 1.5 scale times the local wall thickness, turns by at
  * most a right angle (60 degrees on cubics), and lengths along the boundary grow by less than a
  * factor of about 2.7 from one to the next. Returned owned: utw_division_free(). UTW_E_NOMEM. */
 utw_status utw_division_create(const utw_net *net, double scale, utw_division **division,

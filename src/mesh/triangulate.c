@@ -8,7 +8,7 @@
 #include "base/status.h"
 #include "base/vec2.h"
 
-enum { TRIANGLE_TYPE = 2 }; /* Gmsh's number for three-node triangles */
+enum { LINE_TYPE = 1, TRIANGLE_TYPE = 2 }; /* Gmsh's numbers for elements of two and three nodes */
 
 /* One side of an element on a curve: points a, b of the list below, interval of the division. */
 typedef struct chord {
@@ -25,6 +25,7 @@ typedef struct boundary {
     double (*xy)[2], *size;
     chord *chord;
     int *first_chord; /* [n_edge + 1] */
+    int *first_line;  /* [n_edge + 1] Gmsh's lines of every edge */
 } boundary;
 
 static void boundary_clear(boundary *b)
@@ -33,6 +34,7 @@ static void boundary_clear(boundary *b)
     utw_free(b->size);
     utw_free(b->chord);
     utw_free(b->first_chord);
+    utw_free(b->first_line);
 }
 
 static utw_status boundary_fill(boundary *b, utw_error *err)
@@ -85,18 +87,52 @@ static utw_status gmsh_failed(utw_error *err, const char *what)
                     what);
 }
 
-/* Gmsh's curve loop for one loop of the net: its chords in order, signed. Returns the tag, 0 on
- * failure. */
+/* What Gmsh has as curves: a straight edge of the net with all its sides as one line, each side of
+ * a curved edge as a line of its own (a line's nodes must lie on it). Lines of edge e have the tags
+ * first_line[e] .. first_line[e+1] - 1. */
+static int is_straight(const boundary *b, int edge)
+{
+    return b->net->edge[edge].curve.kind == UTW_LINE;
+}
+
+static int sides_of(const boundary *b, int edge)
+{
+    return b->first_chord[edge + 1] - b->first_chord[edge];
+}
+
+static utw_status give_lines(boundary *b, utw_error *err)
+{
+    int ierr = 0, tag = 1;
+    if ((b->first_line = utw_alloc((size_t)b->net->n_edge + 1, sizeof(int))) == NULL)
+        return utw_fail(err, UTW_E_NOMEM, "out of memory (%s)", __func__);
+    for (int i = 0; i < b->net->n_node && !ierr; i++)
+        gmshModelGeoAddPoint(b->xy[i][0], b->xy[i][1], 0, b->size[i], i + 1, &ierr);
+    for (int e = 0; e < b->net->n_edge && !ierr; e++) {
+        b->first_line[e] = tag;
+        const chord *c = b->chord + b->first_chord[e];
+        const int n = sides_of(b, e);
+        for (int i = 0; i + 1 < n && !is_straight(b, e) && !ierr; i++)
+            gmshModelGeoAddPoint(b->xy[c[i].b][0], b->xy[c[i].b][1], 0, b->size[c[i].b], c[i].b + 1,
+                                 &ierr);
+        if (is_straight(b, e) && !ierr)
+            gmshModelGeoAddLine(c[0].a + 1, c[n - 1].b + 1, tag++, &ierr);
+        for (int i = 0; i < n && !is_straight(b, e) && !ierr; i++)
+            gmshModelGeoAddLine(c[i].a + 1, c[i].b + 1, tag++, &ierr);
+    }
+    b->first_line[b->net->n_edge] = tag;
+    return ierr ? gmsh_failed(err, "take the boundary") : UTW_OK;
+}
+
+/* Gmsh's curve loop for one loop of the net: its lines in order, signed. */
 static int give_loop(const boundary *b, const utw_net_loop *loop, int *tags, int *ierr)
 {
-    int n = 0;
+    size_t n = 0;
     for (int i = 0; i < loop->n; i++) {
         const int ref = loop->ref[i], e = ref > 0 ? ref - 1 : -ref - 1;
-        const int first = b->first_chord[e], count = b->first_chord[e + 1] - first;
-        for (int k = 0; k < count; k++)
-            tags[n++] = ref > 0 ? first + k + 1 : -(first + count - 1 - k + 1);
+        const int first = b->first_line[e], end = b->first_line[e + 1];
+        for (int k = 0; k < end - first; k++) tags[n++] = ref > 0 ? first + k : -(end - 1 - k);
     }
-    return gmshModelGeoAddCurveLoop(tags, (size_t)n, -1, 0, ierr);
+    return gmshModelGeoAddCurveLoop(tags, n, -1, 0, ierr);
 }
 
 static utw_status give_parts(const boundary *b, utw_error *err)
@@ -104,47 +140,108 @@ static utw_status give_parts(const boundary *b, utw_error *err)
     utw_status st = UTW_E_INTERNAL;
     const utw_net *net = b->net;
     int ierr = 0, *tags = NULL, *loops = NULL;
-    UTW_TRY_ALLOC(tags = utw_alloc((size_t)b->n_chord, sizeof *tags));
+    UTW_TRY_ALLOC(tags = utw_alloc((size_t)b->first_line[net->n_edge], sizeof *tags));
     UTW_TRY_ALLOC(loops = utw_alloc((size_t)net->n_loop, sizeof *loops));
-    for (int l = 0; l < net->n_loop;) {
+    for (int l = 0; l < net->n_loop && !ierr;) {
         const int part = net->loop[l].part;
-        int n = 0;
-        for (; l < net->n_loop && net->loop[l].part == part; l++) {
+        size_t n = 0;
+        for (; l < net->n_loop && net->loop[l].part == part && !ierr; l++)
             loops[n++] = give_loop(b, &net->loop[l], tags, &ierr);
-            if (ierr) {
-                st = gmsh_failed(err, "follow a loop");
-                goto done;
-            }
-        }
-        gmshModelGeoAddPlaneSurface(loops, (size_t)n, part + 1, &ierr);
-        if (ierr) {
-            st = gmsh_failed(err, "fill a part");
-            goto done;
-        }
+        if (!ierr) gmshModelGeoAddPlaneSurface(loops, n, part + 1, &ierr);
     }
-    st = UTW_OK;
+    st = ierr ? gmsh_failed(err, "take the boundary") : UTW_OK;
 done:
     utw_free(tags);
     utw_free(loops);
     return st;
 }
 
-static utw_status generate(const boundary *b, utw_error *err)
+/* The mesh of points and lines is ours already: left to itself Gmsh would integrate along every
+ * line to divide it. */
+static int give_point_node(const boundary *b, int point)
 {
     int ierr = 0;
-    gmshModelAdd("section", &ierr);
-    for (int i = 0; i < b->n_point && !ierr; i++)
-        gmshModelGeoAddPoint(b->xy[i][0], b->xy[i][1], 0, b->size[i], i + 1, &ierr);
-    for (int i = 0; i < b->n_chord && !ierr; i++) {
-        gmshModelGeoAddLine(b->chord[i].a + 1, b->chord[i].b + 1, i + 1, &ierr);
-        if (!ierr) gmshModelGeoMeshSetTransfiniteCurve(i + 1, 2, "Progression", 1, &ierr);
+    size_t tag = (size_t)point + 1;
+    double xyz[3] = {b->xy[point][0], b->xy[point][1], 0};
+    gmshModelMeshAddNodes(0, point + 1, &tag, 1, xyz, 3, NULL, 0, &ierr);
+    return ierr;
+}
+
+/* Sides from..to-1 of an edge, all on one line. */
+static int give_sides_on(const boundary *b, int line, int from, int to, size_t *work)
+{
+    int ierr = 0;
+    size_t *tag = work, *node = work + (to - from);
+    for (int i = from; i < to; i++) {
+        tag[i - from] = (size_t)i + 1;
+        node[2 * (i - from)] = (size_t)b->chord[i].a + 1;
+        node[2 * (i - from) + 1] = (size_t)b->chord[i].b + 1;
     }
-    if (ierr) return gmsh_failed(err, "take the boundary");
-    const utw_status st = give_parts(b, err);
-    if (st != UTW_OK) return st;
+    const size_t n = (size_t)(to - from);
+    gmshModelMeshAddElementsByType(line, LINE_TYPE, tag, n, node, 2 * n, &ierr);
+    return ierr;
+}
+
+/* The nodes inside a straight edge, at even fractions. */
+static int give_line_nodes(const boundary *b, int edge, size_t *tag, double *xyz)
+{
+    int ierr = 0;
+    const chord *c = b->chord + b->first_chord[edge];
+    const size_t n = (size_t)sides_of(b, edge) - 1;
+    if (n == 0) return 0;
+    double *t = xyz + 3 * n;
+    for (size_t i = 0; i < n; i++) {
+        tag[i] = (size_t)c[i].b + 1;
+        xyz[3 * i] = b->xy[c[i].b][0];
+        xyz[3 * i + 1] = b->xy[c[i].b][1];
+        xyz[3 * i + 2] = 0;
+        t[i] = c[i].t1;
+    }
+    gmshModelMeshAddNodes(1, b->first_line[edge], tag, n, xyz, 3 * n, t, n, &ierr);
+    return ierr;
+}
+
+static utw_status give_sides(const boundary *b, utw_error *err)
+{
+    utw_status st = UTW_E_INTERNAL;
+    int ierr = 0;
+    size_t *tags = NULL;
+    double *xyz = NULL;
+    UTW_TRY_ALLOC(tags = utw_alloc(3 * (size_t)b->n_chord, sizeof *tags));
+    UTW_TRY_ALLOC(xyz = utw_alloc(4 * (size_t)b->n_chord, sizeof *xyz));
+    for (int i = 0; i < b->net->n_node && !ierr; i++) ierr = give_point_node(b, i);
+    for (int e = 0; e < b->net->n_edge && !ierr; e++) {
+        const int first = b->first_chord[e], n = sides_of(b, e);
+        if (is_straight(b, e)) {
+            ierr = give_line_nodes(b, e, tags, xyz);
+            if (!ierr) ierr = give_sides_on(b, b->first_line[e], first, first + n, tags);
+            continue;
+        }
+        for (int i = first; i + 1 < first + n && !ierr; i++)
+            ierr = give_point_node(b, b->chord[i].b);
+        for (int i = 0; i < n && !ierr; i++)
+            ierr = give_sides_on(b, b->first_line[e] + i, first + i, first + i + 1, tags);
+    }
+    st = ierr ? gmsh_failed(err, "take the boundary") : UTW_OK;
+done:
+    utw_free(tags);
+    utw_free(xyz);
+    return st;
+}
+
+static utw_status generate(boundary *b, utw_error *err)
+{
+    utw_status st = UTW_E_INTERNAL;
+    int ierr = 0;
+    gmshModelAdd("section", &ierr);
+    UTW_TRY(give_lines(b, err));
+    UTW_TRY(give_parts(b, err));
     gmshModelGeoSynchronize(&ierr);
+    UTW_TRY(give_sides(b, err));
     if (!ierr) gmshModelMeshGenerate(2, &ierr);
-    return ierr ? gmsh_failed(err, "fill the outline with triangles") : UTW_OK;
+    st = ierr ? gmsh_failed(err, "fill the outline with triangles") : UTW_OK;
+done:
+    return st;
 }
 
 /* ---- reading the mesh back
@@ -167,18 +264,17 @@ static utw_status read_nodes(utw_mesh *mesh, const boundary *b, int **node_of_ta
     UTW_TRY_ALLOC(mesh->xy = utw_alloc(n, sizeof *mesh->xy));
     *n_tag = most + 1;
     mesh->n_node = (int)n;
+    /* Boundary nodes keep the tags we gave; make sure, and take our own coordinates. */
+    int inner = b->n_point;
     for (size_t i = 0; i < n; i++) {
-        (*node_of_tag)[tag[i]] = (int)i;
-        for (int k = 0; k < 2; k++) mesh->xy[i][k] = xyz[3 * i + (size_t)k];
-    }
-    /* Gmsh lists the nodes of points first, in the order of their tags; make sure, and take our own
-     * coordinates. */
-    for (int i = 0; i < b->n_point; i++) {
-        if (!(utw_distance(mesh->xy[i], b->xy[i]) <= 1e-3 * b->size[i])) {
-            st = utw_fail(err, UTW_E_INTERNAL, "the mesher reordered the boundary points");
+        const int own = tag[i] <= (size_t)b->n_point, node = own ? (int)tag[i] - 1 : inner++;
+        const double xy[2] = {xyz[3 * i], xyz[3 * i + 1]};
+        if (node >= (int)n || (own && !(utw_distance(xy, b->xy[node]) <= 1e-3 * b->size[node]))) {
+            st = utw_fail(err, UTW_E_INTERNAL, "the mesher renumbered the boundary");
             goto done;
         }
-        for (int k = 0; k < 2; k++) mesh->xy[i][k] = b->xy[i][k];
+        (*node_of_tag)[tag[i]] = node;
+        for (int k = 0; k < 2; k++) mesh->xy[node][k] = own ? b->xy[node][k] : xy[k];
     }
     st = UTW_OK;
 done:
@@ -307,6 +403,10 @@ utw_status utw_mesh_triangulate(const utw_net *net, const utw_division *division
     gmshOptionSetNumber("General.Verbosity", 0, &ierr);
     gmshOptionSetNumber("Mesh.Algorithm", 6, &ierr); /* frontal-Delaunay */
     gmshOptionSetNumber("Mesh.MaxNumThreads2D", 1, &ierr);
+    gmshOptionSetNumber("Mesh.MeshOnlyEmpty", 1, &ierr); /* the lines are meshed already */
+    gmshOptionSetNumber("Mesh.Smoothing", 0, &ierr);
+    gmshOptionSetNumber("Mesh.Renumber", 0,
+                        &ierr); /* boundary nodes are found again by their tags */
     UTW_TRY(generate(&b, err));
     UTW_TRY(read_mesh(&b, mesh, err));
     st = UTW_OK;

@@ -15,7 +15,7 @@
  */
 #define DECAY 0.15
 enum {
-    LARGEST_STEP = 3, /* orders added at once */
+    LARGEST_STEP = 4, /* orders added at once */
     SPLIT_ORDER = 10  /* an element of this order that still dominates is cut in four */
 };
 
