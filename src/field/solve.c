@@ -362,10 +362,12 @@ static utw_status set_orders(utw_field *f, const unsigned char *order, utw_error
     UTW_TRY_ALLOC(f->first = utw_alloc((size_t)mesh->n_tri + 1, sizeof(size_t)));
     memcpy(f->order, order, (size_t)mesh->n_tri);
     for (int e = 0; e < mesh->n_edge; e++) {
-        const int *tri = mesh->edge[e].tri, a = order[tri[0]];
-        /* a boundary side must hold its cubic data; the potential gains a little by it */
-        const int b = tri[1] >= 0 ? order[tri[1]] : data;
-        f->side_order[e] = (unsigned char)(tri[1] < 0 ? (a > b ? a : b) : a < b ? a : b);
+        /* between two elements the smaller order (as good, and fewer unknowns); on the boundary at
+         * least what its data need */
+        const int *tri = mesh->edge[e].tri, own = order[tri[0]],
+                  other = tri[1] < 0 ? data : order[tri[1]];
+        const int least = own < other ? own : other, greatest = own < other ? other : own;
+        f->side_order[e] = (unsigned char)(tri[1] < 0 ? greatest : least);
     }
     int vertices = mesh->n_node - 1, sides = 0, inner = 0;
     for (int e = 0; e < mesh->n_edge; e++) sides += f->side_order[e] - 1;
