@@ -55,13 +55,13 @@ void utw_element_index(const utw_element *el, int p, int *index)
     }
 }
 
-/* A curved map is no polynomial. On a quarter circle ten points a direction integrate it to
- * rounding whatever the order, on an eighth seven do. */
+/* A curved map is no polynomial: the more a side turns, the more points it takes to integrate to
+ * rounding whatever the order. Measured on ring sectors; squares of quadratic fluxes need three
+ * points on straight elements. */
 int utw_element_points(const utw_element *el)
 {
-    const int least = el->blend.turning > 0.8   ? 10
-                      : el->blend.turning > 0.3 ? 7
-                                                : 3; /* squares of quadratics: 3 */
+    const double turning = el->blend.turning;
+    const int least = turning > 0.8 ? 13 : turning > 0.4 ? 10 : turning > 0.15 ? 8 : 3;
     const int q = el->top + (el->blend.any ? 2 : 1);
     return q < least ? least : q;
 }

@@ -15,6 +15,9 @@
 /* Rounding of the sums over all points, relative to the integral of the squares that enter;
  * measured below 1e-14. */
 #define ROUNDING 2e-14
+/* Rounding of the solved equations, relative: an energy feels it at once, while int |stress|^2 of a
+ * pair feels only its square. */
+#define SOLVER_ROUNDING 1e-12
 
 typedef struct moments {
     double A, Ixx, Iyy, Ixy, D, Ixxx, Ixxy, Ixyy,
@@ -55,9 +58,10 @@ static double half_width(const utw_measures *m, const combination u, const combi
 /* int grad u . grad v for combinations of pairs. */
 static utw_interval energy_of(const utw_measures *m, const combination u, const combination v)
 {
-    return utw_about(form((const double(*)[UTW_PAIR_MAX])m->energy, u, v) +
-                         0.5 * form((const double(*)[UTW_PAIR_MAX])m->gap, u, v),
-                     half_width(m, u, v));
+    const double(*energy)[UTW_PAIR_MAX] = (const double(*)[UTW_PAIR_MAX])m->energy;
+    const double(*gap)[UTW_PAIR_MAX] = (const double(*)[UTW_PAIR_MAX])m->gap;
+    const double solver = SOLVER_ROUNDING * sqrt(fabs(form(energy, u, u) * form(energy, v, v)));
+    return utw_about(form(energy, u, v) + 0.5 * form(gap, u, v), half_width(m, u, v) + solver);
 }
 
 /* int stress_u . stress_v for combinations of not balanced pairs. */
