@@ -105,7 +105,7 @@ static void add_lift(const utw_unit_element *e, double r, double s, double (*d)[
     const utw_unit_stress *u = e->unit;
     const utw_setting *set = &u->solution->solved.field->setting;
     double rest[UTW_PAIR_MAX][2];
-    if (!utw_lift_rest(set->lift, set->mesh, &e->element, r, s, rest)) return;
+    if (!utw_lift_rest(set->lift, set->mesh, &e->element, r, s, NULL, NULL, rest)) return;
     for (int k = 0; k < UTW_N_UNIT; k++)
         for (int i = 0; i < UTW_N_PAIR; i++) {
             const int column = set->lift->column[i];
