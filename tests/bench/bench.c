@@ -4,6 +4,7 @@
  *   bench --million FILE                   one solution of order 2 with about a million unknowns
  *   bench --loop N FILE                    N solutions in a row; memory at the start and at the end
  * Times are milliseconds inside the process; loading the libraries is over before main. */
+#include <math.h>
 #include <stdio.h>
 #include <stdlib.h>
 #include <string.h>
