@@ -11,12 +11,12 @@
 
 /* A side per so many wall thicknesses. The study of grading and order on five profiles found 1
  * to 1.5 to be cheapest. */
-#define SIDE_PER_WALL 1.3
+#define SIDE_PER_WALL 1.5
 /* In a wedge, length over distance from the tip: a span from the tip on is never halved for the
  * wedge's sake (its first sample lies at a sixth of it, and it may be twice the size). */
 #define WEDGE 2.5
 /* Growth of the size with the distance along the boundary. */
-#define GROWTH  1.4
+#define GROWTH 1.7
 #define DEEPEST 24 /* halvings of one curve */
 
 /* A piece of a net edge with the size wanted there. */
