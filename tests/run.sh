@@ -8,7 +8,7 @@ build=${1:-$top/build}
 sh "$top/tests/install.sh" tests
 export OPENBLAS_NUM_THREADS=1
 jobs=$(nproc)
-cmake -S "$top" -B "$build" -DUNTWIST_WERROR=ON >/dev/null
+cmake -S "$top" -B "$build" -DUNTWIST_TESTS=ON -DUNTWIST_WERROR=ON >/dev/null
 cmake --build "$build" -j "$jobs"
 (cd "$build" && ctest --output-on-failure --no-tests=error -j "$jobs")
 cmake -S "$top" -B "$build-sanitize" -DCMAKE_BUILD_TYPE=RelWithDebInfo -DUNTWIST_WERROR=ON -DUNTWIST_SANITIZE=ON \

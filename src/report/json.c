@@ -97,7 +97,7 @@ static void add_heading(writer *w, cJSON *root)
     add_text(w, root, "untwist", utw_version());
     add_text(w, root, "name", utw_outline_name(outline));
     add_text(w, root, "units", utw_outline_units(outline));
-    add_text(w, root, "caution", UTW_CAUTION);
+    add_text(w, root, "caution", utw_report_caution(w->report->solution));
 }
 
 /* The named dimensions the section was drawn with; only when it has any. */

@@ -77,7 +77,7 @@ void utw_number_write(const utw_quantity *q, double noise, utw_number *number)
         number->low[0] = number->high[0] = '\0';
         return;
     }
-    if (q->trust == UTW_EXACT || (q->low == q->value && q->high == q->value)) {
+    if (q->trust == UTW_EXACT) {
         write_exact(q->value, noise, number);
         return;
     }

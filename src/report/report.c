@@ -10,6 +10,30 @@
 #include "base/vec2.h"
 #include "section/solution.h"
 
+#define CAUTION                                                                                    \
+    "Linear elastic material and small displacements; no buckling, no fatigue, no plastic "        \
+    "collapse. The governing design code and a licensed engineer decide."
+
+/* Parts of materials that differ in stiffness. */
+static int is_composite(const utw_outline *o)
+{
+    for (int p = 1; p < o->n_part; p++) {
+        if (o->part[p].material == o->part[0].material) continue;
+        const utw_material *a = &o->material[o->part[0].material],
+                           *b = &o->material[o->part[p].material];
+        if (a->E != b->E || a->nu != b->nu) return 1;
+    }
+    return 0;
+}
+
+const char *utw_report_caution(const utw_solution *solution)
+{
+    return is_composite(solution->outline)
+               ? "The parts are of different materials: these are the constants of the shape as if "
+                 "it were of one material, not those of the composite bar. " CAUTION
+               : CAUTION;
+}
+
 utw_status utw_report_check(const utw_report *report, char **text, const char *function,
                             utw_error *err)
 {

@@ -5,11 +5,8 @@
 
 #include "untwist.h"
 
-/** What every report must say. */
-#define UTW_CAUTION                                                                                \
-    "Linear elastic material and small displacements; no buckling, no fatigue, no plastic "        \
-    "collapse. "                                                                                   \
-    "The governing design code and a licensed engineer decide."
+/** What a report of this solution must say to its reader. Returned borrowed. */
+const char *utw_report_caution(const utw_solution *solution);
 
 /** Check what a caller hands in; `function` stands in the message. UTW_E_ARGUMENT. */
 utw_status utw_report_check(const utw_report *report, char **text, const char *function,

@@ -111,10 +111,12 @@ static void write_table(const table *t)
 {
     write_line(t, "symbol", "what it is", "value", "low", "high", "trust", "unit");
     for (int g = 0; g < N_GROUP; g++) {
-        utw_text_add(t->text, "%s\n", groups[g].title);
+        int any = 0;
         for (int i = 0; i < groups[g].n; i++) {
             const row *r = &t->row[groups[g].which[i]];
             if (t->absent[r->which][0] != '\0') continue;
+            if (!any) utw_text_add(t->text, "%s\n", groups[g].title);
+            any = 1;
             write_line(t, utw_constant_key(r->which), utw_constant_meaning(r->which),
                        r->number.value, r->number.low, r->number.high,
                        utw_report_trust(r->quantity.trust), r->unit);
@@ -214,14 +216,16 @@ static void write_solution(const table *t)
     else
         snprintf(order, sizeof order, "%d to %d", info.least_order, info.greatest_order);
     utw_text words = {.text = NULL};
-    utw_text_add(
-        &words,
-        "%d triangles of order %s, %d unknowns, %d %s, %.2f s (mesh %.2f, equations %.2f)\n"
-        "(high - low)/value of J is %s; asked for %s: %s",
-        info.triangles, order, info.unknowns, info.rounds, info.rounds == 1 ? "round" : "rounds",
-        info.seconds_total, info.seconds_mesh, info.seconds_solve, gap, tolerance,
-        info.reached ? "reached" : "NOT REACHED; the bounds hold all the same");
+    utw_text_add(&words,
+                 "%d triangles of order %s, %d unknowns, %d %s\n"
+                 "(high - low)/value of J is %s; asked for %s: %s",
+                 info.triangles, order, info.unknowns, info.rounds,
+                 info.rounds == 1 ? "round" : "rounds", gap, tolerance,
+                 info.reached ? "reached" : "NOT REACHED; the bounds hold all the same");
     write_note(t, "Solution", &words);
+    begin_note(t->text, "Time");
+    utw_text_add(t->text, "%.2f s (drawing %.2f, mesh %.2f, equations %.2f)\n", info.seconds_total,
+                 info.seconds_read, info.seconds_mesh, info.seconds_solve);
 }
 
 static void write_notes(const table *t)
@@ -238,7 +242,7 @@ static void write_notes(const table *t)
                   "from two independent solutions that bound it from both sides.\n"
                   "estimate: low and high are estimated from two solutions; they are not bounds.");
     begin_note(t->text, "Caution");
-    utw_text_wrap(t->text, INDENT, WIDTH, UTW_CAUTION);
+    utw_text_wrap(t->text, INDENT, WIDTH, utw_report_caution(t->solution));
 }
 
 utw_status utw_report_text(const utw_report *report, char **text, utw_error *err)

@@ -50,6 +50,47 @@ static void every_command_has_help(void **state)
     free(help);
 }
 
+/* The manual page has the commands and the options that help has, and no others. */
+static void the_manual_page_has_every_option(void **state)
+{
+    (void)state;
+    char *page = NULL, *help = NULL;
+    assert_int_equal(run_untwist("--version >/dev/null && cat ../docs/untwist.1", &page), 0);
+    assert_int_equal(run_untwist("--help", &help), 0);
+    for (char *at = strstr(page, "\n.SS "); at != NULL; at = strstr(at + 1, "\n.SS ")) {
+        char name[32], ask[64], *text = NULL;
+        assert_int_equal(sscanf(at, "\n.SS %31s", name), 1);
+        snprintf(ask, sizeof ask, "help %s", name);
+        assert_int_equal(run_untwist(ask, &text), 0);
+        char *end = strstr(at + 1, "\n.S");
+        assert_non_null(end);
+        *end = '\0'; /* the section of this command alone */
+        int in_help = 0, in_page = 0;
+        for (char *o = strstr(text, "\n  --"); o != NULL; o = strstr(o + 1, "\n  --"), in_help++) {
+            char option[64], entry[80];
+            assert_int_equal(sscanf(o, "\n  --%63[a-z]", option), 1);
+            snprintf(entry, sizeof entry, "\\-\\-%s", option);
+            if (strstr(at, entry) == NULL)
+                print_error("docs/untwist.1: %s lacks --%s\n", name, option);
+            assert_non_null(strstr(at, entry));
+        }
+        for (char *o = strstr(at, " \\-\\-"); o != NULL; o = strstr(o + 1, " \\-\\-")) in_page++;
+        assert_int_equal(in_page, in_help);
+        *end = '\n';
+        free(text);
+    }
+    const char *line = strstr(help, "Commands:\n") + strlen("Commands:\n");
+    for (; line[0] == ' '; line = strchr(line, '\n') + 1) {
+        char name[32], entry[40];
+        if (line[2] == ' ') continue;
+        assert_int_equal(sscanf(line, " %31s", name), 1);
+        snprintf(entry, sizeof entry, "\n.SS %s\n", name);
+        assert_non_null(strstr(page, entry));
+    }
+    free(help);
+    free(page);
+}
+
 static void version_names_the_libraries(void **state)
 {
     (void)state;
@@ -112,6 +153,7 @@ int main(void)
     const struct CMUnitTest tests[] = {
         cmocka_unit_test(help_lists_the_commands),
         cmocka_unit_test(every_command_has_help),
+        cmocka_unit_test(the_manual_page_has_every_option),
         cmocka_unit_test(version_names_the_libraries),
         cmocka_unit_test(wrong_use_is_told),
         cmocka_unit_test(output_that_cannot_be_written_is_an_error),

@@ -55,6 +55,8 @@ static void bounds_show_two_digits_of_their_difference(void **state)
     expect(1.2349, 1.2341, 1.2350, "1.2349", "1.23410", "1.23500");
     /* bounds closer than ten digits */
     expect(1.5, 1.5 - 1e-13, 1.5 + 1e-13, "1.500000000", "1.499999999", "1.500000001");
+    expect(17.78576210009, 17.78576210009, 17.78576210009, "17.78576210", "17.78576210",
+           "17.78576211");
     /* low and high carry into a further digit */
     expect(9.997, 9.994, 10.0, "9.997", "9.9940", "10.0000");
 }

@@ -65,6 +65,33 @@ static void every_trust_has_its_word(void **state)
     assert_string_equal(utw_report_trust(UTW_ESTIMATE), "estimate");
 }
 
+static void parts_of_different_materials_are_cautioned(void **state)
+{
+    (void)state;
+    static const char *const drawing =
+        "{\"units\": \"mm N\", \"materials\": {\"s\": {\"E\": 210000, \"nu\": 0.3}, \"b\": "
+        "{\"E\": 105000, \"nu\": 0.3}}, \"parts\": [{\"material\": \"s\", \"outline\": "
+        "[[0,0],[50,0],[50,30],[0,30]]}, {\"material\": \"%s\", \"outline\": "
+        "[[0,30],[50,30],[50,36],[0,36]]}%s]}";
+    static const char *const again =
+        ", {\"material\": \"b\", \"outline\": [[0,36],[50,36],[50,40],[0,40]]}";
+    utw_error err;
+    utw_options options = UTW_OPTIONS_INIT;
+    options.fixed_order = 2;
+    for (int different = 0; different < 2; different++) {
+        char text[600];
+        utw_solution *s = NULL;
+        snprintf(text, sizeof text, drawing, different ? "b" : "s", different ? again : "");
+        utw_outline *o = utw_outline_of(text);
+        assert_ok(utw_solve(o, &options, &s, &err));
+        const char *caution = utw_report_caution(s);
+        assert_true((strstr(caution, "not those of the composite bar") != NULL) == different);
+        assert_non_null(strstr(caution, "licensed engineer"));
+        utw_solution_free(s);
+        utw_outline_free(o);
+    }
+}
+
 static void wrong_calls_are_refused(void **state)
 {
     (void)state;
@@ -88,6 +115,7 @@ int main(void)
         cmocka_unit_test(units_follow_the_power_of_the_length),
         cmocka_unit_test(angles_are_in_degrees_and_the_rest_is_as_it_is),
         cmocka_unit_test(every_trust_has_its_word),
+        cmocka_unit_test(parts_of_different_materials_are_cautioned),
         cmocka_unit_test(wrong_calls_are_refused),
     };
     return cmocka_run_group_tests(tests, solve, clear);
