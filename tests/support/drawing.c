@@ -4,6 +4,7 @@
 
 #include "base/memory.h"
 #include "base/vec2.h"
+#include "support/mapping.h"
 #include "support/support.h"
 
 void drawing_init(drawing *d)
@@ -139,21 +140,9 @@ void drawing_rectangle(drawing *d, double x0, double y0, double x1, double y1)
     drawing_polygon(d, 4, xy);
 }
 
-static void reverse(utw_loop *loop)
-{
-    for (int i = 0, j = loop->n - 1; i <= j; i++, j--) {
-        const utw_curve first = utw_curve_reversed(&loop->curve[i]);
-        loop->curve[i] = utw_curve_reversed(&loop->curve[j]);
-        loop->curve[j] = first;
-        const int v = loop->vertex[i];
-        loop->vertex[i] = loop->vertex[j];
-        loop->vertex[j] = v;
-    }
-}
-
 void drawing_reverse(drawing *d)
 {
-    reverse(last_loop(d));
+    utw_loop_reverse(last_loop(d));
 }
 
 void drawing_mixed(drawing *d)
@@ -171,45 +160,14 @@ void drawing_mixed(drawing *d)
     drawing_reverse(d);
 }
 
-static void map(double p[2], const double m[4], const double shift[2])
-{
-    const double x = p[0], y = p[1];
-    p[0] = m[0] * x + m[1] * y + shift[0];
-    p[1] = m[2] * x + m[3] * y + shift[1];
-}
-
 void drawing_map(drawing *d, const double m[4], const double shift[2])
 {
-    const double none[2] = {0, 0};
-    for (int p = 0; p < d->outline.n_part; p++)
-        for (int l = 0; l < d->outline.part[p].n_loop; l++) {
-            utw_loop *loop = &d->outline.part[p].loop[l];
-            for (int k = 0; k < loop->n; k++) {
-                utw_curve *c = &loop->curve[k];
-                map(c->from, m, shift);
-                map(c->to, m, shift);
-                map(c->c1, m, shift);
-                map(c->c2, m, shift);
-                map(c->centre, m, shift);
-                map(c->u, m, none);
-                map(c->v, m, none);
-            }
-            if (m[0] * m[3] - m[1] * m[2] < 0) reverse(loop);
-        }
+    const mapping map = {{m[0], m[1], m[2], m[3]}, {shift[0], shift[1]}};
+    mapping_apply(&map, &d->outline);
 }
 
 const utw_outline *drawing_done(drawing *d)
 {
-    double *box = d->outline.box;
-    box[0] = box[1] = HUGE_VAL;
-    box[2] = box[3] = -HUGE_VAL;
-    for (int p = 0; p < d->outline.n_part; p++)
-        for (int l = 0; l < d->outline.part[p].n_loop; l++)
-            for (int k = 0; k < d->outline.part[p].loop[l].n; k++) {
-                double b[4];
-                utw_curve_box(&d->outline.part[p].loop[l].curve[k], b);
-                for (int q = 0; q < 4; q++)
-                    box[q] = q < 2 ? fmin(box[q], b[q]) : fmax(box[q], b[q]);
-            }
+    mapping_set_box(&d->outline);
     return &d->outline;
 }
