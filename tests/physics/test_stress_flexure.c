@@ -163,7 +163,7 @@ static void test_ellipse(void **state)
     stressed s =
         stressed_of("{\"units\": \"mm N\", \"materials\": {\"m\": {\"E\": 1, \"nu\": 0.3}}, "
                     "\"parts\": [{\"material\": \"m\", \"outline\": {\"ellipse\": [0,0,2,1]}}]}",
-                    1e-10);
+                    1e-12);
     for (int k = 0; k < 60; k++) {
         const double r = (k % 10) / 9.0, x = A * r * cos(0.7 * k), y = B * r * sin(0.7 * k);
         const double phi_x = C * (1 - 3 * x * x / (A * A) - y * y / (B * B)),

@@ -99,7 +99,7 @@ static void test_keyway(void **state)
                    "[0.3,0]}]"),
              c, y, c, -y);
     /* the outer arc runs from the lower end to the upper one, the keyway back */
-    stressed s = stressed_of(json, 1e-10);
+    stressed s = stressed_of(json, 1e-12);
     const utw_forces f = {.T = 1};
     assert_close(stressed_at(&s, f, 0.3, 0).tau, 1.255675103478009, 1e-6);
     assert_close(stressed_at(&s, f, 2, 0).tau_yz, 0.7220131844998554, 1e-6);
