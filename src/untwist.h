@@ -434,6 +434,38 @@ UTW_API int utw_stress_corner_count(const utw_stress *stress);
 UTW_API UTW_CHECK utw_status utw_stress_corner(const utw_stress *stress, int k, double at[2], double *radius,
                                                utw_error *err);
 
+/** The load cases of an outline with their greatest stresses, and the stresses at chosen points. */
+typedef struct utw_cases utw_cases;
+
+/** Compute them. [in] stress, borrowed; it must outlive the cases. name[n_name], borrowed: the cases wanted, by their
+ *  names in the section file; n_name = 0: all. probe[n_probe][2], borrowed: points [L]. A case that the section cannot
+ *  carry, or that needs a Poisson's ratio which is missing, is kept with its reason: utw_cases_get() gives it.
+ *  [out] *cases, returned owned: utw_cases_free(). UTW_E_ARGUMENT; UTW_E_LOAD when there is no case of a name or a
+ *  point lies outside; UTW_E_NOMEM. */
+UTW_API UTW_CHECK utw_status utw_cases_create(const utw_stress *stress, int n_name, const char *const *name,
+                                              int n_probe, const double (*probe)[2], utw_cases **cases,
+                                              utw_error *err);
+
+/** Free them; NULL is allowed. */
+UTW_API void utw_cases_free(utw_cases *cases);
+
+/** Their number, in the order of the section file. */
+UTW_API int utw_cases_count(const utw_cases *cases);
+
+/** The k-th case. [out] *name, returned borrowed, and *forces, also when the case has no result; *peaks. Each may be
+ *  NULL. UTW_E_ARGUMENT; the case's own UTW_E_MATERIAL or UTW_E_LOAD. */
+UTW_API UTW_CHECK utw_status utw_cases_get(const utw_cases *cases, int k, const char **name, utw_forces *forces,
+                                           utw_stress_peaks *peaks, utw_error *err);
+
+/** The stress of the k-th case at a probe. Statuses as of utw_cases_get(). */
+UTW_API UTW_CHECK utw_status utw_cases_probe(const utw_cases *cases, int k, int probe, utw_stress_point *point,
+                                             utw_error *err);
+
+/** The envelope of the cases that have results; its indices are those of utw_cases_get(). UTW_E_ARGUMENT;
+ *  UTW_E_LOAD when none has. */
+UTW_API UTW_CHECK utw_status utw_cases_envelope(const utw_cases *cases, utw_stress_envelope *envelope,
+                                                utw_error *err);
+
 /* ---- thin-walled theory -------------------------------------------------------------------------- */
 
 /** What the thin-walled theory says of a midline: area on the midline, no thickness terms in the second
@@ -511,9 +543,10 @@ UTW_API UTW_CHECK utw_status utw_thin_at(const utw_thin *thin, int wall, double 
 typedef struct utw_report {
     int version;                  /* 1 */
     const utw_solution *solution; /* borrowed; required */
+    const utw_cases *cases;       /* borrowed: load cases and probes of this solution */
 } utw_report;
 
-#define UTW_REPORT_INIT {1, NULL}
+#define UTW_REPORT_INIT {1, NULL, NULL}
 
 /** A table for people: the constants with their bounds, trust and units, what is left out and why, what
  *  the solution took. Plain text of at most 100 columns at usual tolerances. Angles are in degrees.
@@ -524,6 +557,11 @@ UTW_API UTW_CHECK utw_status utw_report_text(const utw_report *report, char **te
  *  library, angles in degrees; a number that does not exist is null. [out] *text, returned owned:
  *  utw_report_free(). UTW_E_ARGUMENT, UTW_E_NOMEM. */
 UTW_API UTW_CHECK utw_status utw_report_json(const utw_report *report, char **text, utw_error *err);
+
+/** The load cases and probes of the report as comma-separated values (RFC 4180): one line for each number, with the
+ *  columns case, point, quantity, value, error, x, y, unit. [out] *text, returned owned: utw_report_free().
+ *  UTW_E_ARGUMENT (report->cases is needed), UTW_E_NOMEM. */
+UTW_API UTW_CHECK utw_status utw_report_csv(const utw_report *report, char **text, utw_error *err);
 
 /** Free a report; NULL is allowed. */
 UTW_API void utw_report_free(char *text);

@@ -9,6 +9,7 @@
 #include "base/vec2.h"
 #include "cli/commands.h"
 #include "cli/message.h"
+#include "cli/point.h"
 #include "outline/shape.h"
 #include "report/shape_file.h"
 
@@ -59,12 +60,12 @@ static int show_shape(const utw_shape *shape)
     return print(&text);
 }
 
-/* A finite number that is all of the text up to `end` (NULL: up to its end). */
-static int number(const char *text, const char *end, double *value)
+/* A finite number that is all of the text. */
+static int number(const char *text, double *value)
 {
     char *stop;
     *value = strtod(text, &stop);
-    return stop != text && (end != NULL ? stop == end : *stop == '\0') && isfinite(*value);
+    return stop != text && *stop == '\0' && isfinite(*value);
 }
 
 /* What the command line asks for. */
@@ -78,15 +79,10 @@ typedef struct request {
 
 static int read_placement(const cli_call *call, utw_placement *placement)
 {
-    const char *at = cli_text(call, "at"), *comma = at == NULL ? NULL : strchr(at, ',');
+    const char *at = cli_text(call, "at");
     placement->mirror = cli_flag(call, "mirror");
     placement->turn = fmod(cli_number(call, "turn", 0), 360) * (UTW_PI / 180);
-    if (at == NULL) return CLI_DONE;
-    if (comma != NULL && number(at, comma, &placement->at[0]) &&
-        number(comma + 1, NULL, &placement->at[1]))
-        return CLI_DONE;
-    cli_message("shape: --at takes X,Y, not '%s'", at);
-    return CLI_USAGE;
+    return at == NULL ? CLI_DONE : cli_read_point(call, "at", at, placement->at);
 }
 
 /* An operand KEY=VALUE. */
@@ -97,7 +93,7 @@ static int read_dimension(const char *operand, request *q)
         cli_message("shape: a dimension is given as KEY=VALUE, not '%s'", operand);
         return CLI_USAGE;
     }
-    if (!number(equals + 1, NULL, &q->values[q->n])) {
+    if (!number(equals + 1, &q->values[q->n])) {
         cli_message("shape: not a number: '%s'", operand);
         return CLI_USAGE;
     }

@@ -1,56 +1,55 @@
 /* SPDX-License-Identifier: GPL-3.0-or-later
- * untwist solve: the constants of a section. */
-#include <string.h>
-#include <sys/stat.h>
-
+ * untwist solve: the constants of a section and the stresses of its load cases. */
+#include "cli/cases.h"
 #include "cli/commands.h"
 #include "cli/message.h"
+#include "cli/output.h"
 #include "cli/section.h"
 
-/* 1 when both paths are the same file, so that writing one would destroy the other. */
-static int same_file(const char *a, const char *b)
+static int check_files(const cli_call *call)
 {
-    struct stat sa, sb;
-    if (stat(a, &sa) != 0 || stat(b, &sb) != 0) return 0;
-    return sa.st_dev == sb.st_dev && sa.st_ino == sb.st_ino;
+    int status = cli_check_overwrite(call, "json");
+    if (status == CLI_DONE) status = cli_check_overwrite(call, "csv");
+    if (status != CLI_DONE || !cli_to_output(call, "json") || !cli_to_output(call, "csv"))
+        return status;
+    cli_message("solve: --json and --csv cannot both go to standard output");
+    return CLI_USAGE;
 }
 
-typedef utw_status (*report_writer)(const utw_report *, char **, utw_error *);
-
-/* Write one report to a file, "-" for standard output. */
-static int write_report(report_writer writer, const utw_solution *solution, const char *path)
+static int write_reports(const cli_call *call, const utw_report *report)
 {
-    utw_error err;
-    utw_report report = UTW_REPORT_INIT;
-    char *text = NULL;
-    report.solution = solution;
-    if (writer(&report, &text, &err) != UTW_OK) return cli_fail(&err);
-    const int status = cli_write(path, text);
-    utw_report_free(text);
+    const char *json = cli_text(call, "json"), *csv = cli_text(call, "csv");
+    const int table =
+        !cli_flag(call, "quiet") && !cli_to_output(call, "json") && !cli_to_output(call, "csv");
+    int status = CLI_DONE;
+    if (json != NULL) status = cli_write_report(utw_report_json, report, json);
+    if (status == CLI_DONE && csv != NULL) status = cli_write_report(utw_report_csv, report, csv);
+    if (status == CLI_DONE && table) status = cli_write_report(utw_report_text, report, "-");
     return status;
 }
 
 static int run(const cli_call *call)
 {
-    const char *json = cli_text(call, "json"), *file = call->operand[0];
-    const int to_output = json != NULL && strcmp(json, "-") == 0;
-    cli_section section;
-    if (json != NULL && !to_output && same_file(json, file)) {
-        cli_message("solve: --json %s would overwrite the section file", json);
-        return CLI_USAGE;
+    cli_section section = {NULL, NULL};
+    cli_cases cases = {NULL, NULL};
+    int status = check_files(call);
+    if (status == CLI_DONE) status = cli_solve_section(call, &section);
+    if (status == CLI_DONE) status = cli_compute_cases(call, &section, &cases);
+    if (status == CLI_DONE) {
+        utw_report report = UTW_REPORT_INIT;
+        report.solution = section.solution;
+        report.cases = cases.cases;
+        status = write_reports(call, &report);
     }
-    int status = cli_solve_section(call, &section);
-    if (status == CLI_DONE && json != NULL)
-        status = write_report(utw_report_json, section.solution, json);
-    if (status == CLI_DONE && !to_output && !cli_flag(call, "quiet"))
-        status = write_report(utw_report_text, section.solution, "-");
     if (status == CLI_DONE) status = cli_check_reached(section.solution);
+    cli_clear_cases(&cases);
     cli_clear_section(&section);
     return status;
 }
 
 static const cli_option options[] = {
     CLI_SOLVING_OPTIONS,
+    CLI_CASE_OPTIONS,
     {"json", "FILE",
      "Write all results as JSON to FILE; '-' is standard output, without the table.", CLI_TEXT, 0,
      0, 0},
@@ -60,12 +59,13 @@ static const cli_option options[] = {
 const cli_command cli_solve = {
     "solve",
     "FILE",
-    "constants of a section, each with its bounds",
+    "constants of a section, each with its bounds, and stresses",
     "Reads a section file ('-' is standard input), solves torsion and flexure of the drawn "
     "section, and "
     "prints area, second moments, moduli, torsion constant, shear centre, warping constant and "
     "shear "
-    "areas. Every number says how far it can be trusted: exact, between two bounds, or estimated.",
+    "areas. Every number says how far it can be trusted: exact, between two bounds, or estimated. "
+    "Then the greatest stresses of the load cases of the file, wherever in the section they are.",
     1,
     1,
     sizeof options / sizeof options[0],

@@ -73,6 +73,11 @@ const char *utw_report_trust(utw_trust trust)
     return "unknown";
 }
 
+utw_trust utw_report_peak_trust(const utw_stress_peak *peak)
+{
+    return peak->error <= 1e-11 * fabs(peak->value) ? UTW_EXACT : UTW_ESTIMATE;
+}
+
 void utw_report_unit(const utw_solution *solution, utw_constant which, char *text, size_t n)
 {
     const char *length = solution->outline->length_unit;

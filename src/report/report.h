@@ -20,6 +20,9 @@ utw_status utw_report_constant(const utw_solution *solution, utw_constant which,
 /** "exact", "bracket" or "estimate". Returned borrowed. */
 const char *utw_report_trust(utw_trust trust);
 
+/** How far a greatest stress can be trusted: exact when its error is rounding, else an estimate. */
+utw_trust utw_report_peak_trust(const utw_stress_peak *peak);
+
 /** Unit of a constant, such as "mm^4", "deg" for angles, "-" for factors. [out] text[n]. */
 void utw_report_unit(const utw_solution *solution, utw_constant which, char *text, size_t n);
 

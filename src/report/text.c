@@ -9,6 +9,7 @@
 #include "base/memory.h"
 #include "report/number.h"
 #include "report/report.h"
+#include "report/text_cases.h"
 #include "section/solution.h"
 
 enum {
@@ -30,6 +31,7 @@ typedef struct row {
 
 /* What is being written. */
 typedef struct table {
+    const utw_report *report;
     const utw_solution *solution;
     utw_text *text;
     row row[UTW_CONSTANT_COUNT];
@@ -235,6 +237,7 @@ static void write_notes(const table *t)
     write_dimensions(t);
     write_materials(t);
     write_solution(t);
+    utw_report_note_cases(t->report, t->text);
     begin_note(t->text, "Trust");
     utw_text_wrap(t->text, INDENT, WIDTH,
                   "exact: boundary integrals over the drawn curves, to rounding.\n"
@@ -252,6 +255,7 @@ utw_status utw_report_text(const utw_report *report, char **text, utw_error *err
     table *t = NULL;
     UTW_TRY(utw_report_check(report, text, __func__, err));
     UTW_TRY_ALLOC(t = utw_alloc(1, sizeof *t));
+    t->report = report;
     t->solution = report->solution;
     t->text = &content;
     fill(t);
@@ -260,6 +264,7 @@ utw_status utw_report_text(const utw_report *report, char **text, utw_error *err
                  name[0] != '\0' ? name : "Section without a name",
                  utw_outline_units(t->solution->outline));
     write_table(t);
+    utw_report_text_cases(report, &content);
     write_notes(t);
     UTW_TRY(utw_text_take(&content, text, err));
     st = UTW_OK;

@@ -111,6 +111,70 @@ static void dimensions_may_be_set(void **state)
                "untwist: corner-bracket.json: part 1");
 }
 
+/* Cases, probes and their CSV; what the file holds is tested with report/csv.c. */
+static void load_cases_and_probes_are_printed(void **state)
+{
+    (void)state;
+    char *output = NULL, arguments[300];
+    snprintf(arguments, sizeof arguments,
+             "solve corner-bracket.json --case 'side gust' --probe 3,4 --csv %s/s.csv && cat "
+             "%s/s.csv",
+             folder, folder);
+    assert_int_equal(run_untwist(arguments, &output), 0);
+    assert_non_null(strstr(output, "\nLoad cases: greatest stresses, N/mm^2\n"));
+    assert_non_null(strstr(output, "\nStresses at points\n"));
+    assert_null(strstr(output, "hook"));
+    assert_non_null(strstr(output, "\nside gust,probe 1,sigma_z,"));
+    free(output);
+    assert_int_equal(run_untwist("solve corner-bracket.json --csv -", &output), 0);
+    assert_memory_equal(output, "case,point,quantity,value,error,x,y,unit\r\n", 42);
+    assert_null(strstr(output, "Units"));
+    free(output);
+}
+
+static void wrong_cases_and_probes_are_told(void **state)
+{
+    (void)state;
+    expect_run("solve corner-bracket.json --case 'side gst'", 3,
+               "untwist: there is no load case \"side gst\"; did you mean \"side gust\"?\n");
+    expect_run("solve corner-bracket.json --probe 91,4", 3,
+               "untwist: the point (91, 4) lies outside the section; its nearest point is (90, 4), "
+               "1 away\n");
+    expect_run("solve a.json --json - --csv -", 2,
+               "untwist: solve: --json and --csv cannot both go to standard output\n");
+    expect_run("solve corner-bracket.json --csv corner-bracket.json", 2,
+               "untwist: solve: --csv corner-bracket.json would overwrite the section file\n");
+    static const char square[] = "{\"units\": \"mm N\", \"parts\": [{\"outline\": "
+                                 "[[0,0],[9,0],[9,9],[0,9]]}]%s}";
+    static const struct {
+        const char *loads, *options;
+        int status;
+        const char *text;
+    } list[] = {
+        {"", "--probe 1,2", 3,
+         "untwist: solve: - has no load cases (\"loads\"), which --probe and --csv need\n"},
+        {"", "--case a", 3, "untwist: there is no load case \"a\": the section has no \"loads\"\n"},
+        {", \"loads\": [{\"name\": \"a\", \"Vx\": 1}]", "--case a", 3,
+         "untwist: load case \"a\": the stresses of a shear force depend on Poisson's ratio: give "
+         "every part a material with the same \"nu\"\n"},
+        {"", "--probe '1;2'", 2, "untwist: solve: --probe takes X,Y, not '1;2'\n"},
+        {"", "--probe 1,nan", 2, "untwist: solve: --probe takes X,Y, not '1,nan'\n"},
+        {"", "--probe 0x1,2", 2, "untwist: solve: --probe takes X,Y, not '0x1,2'\n"},
+    };
+    for (size_t i = 0; i < sizeof list / sizeof *list; i++) {
+        char section[300], arguments[600];
+        snprintf(section, sizeof section, square, list[i].loads);
+        snprintf(arguments, sizeof arguments, "solve - %s 2>&1 <<'END'\n%s\nEND\n", list[i].options,
+                 section);
+        char *output = NULL;
+        const int got = run_untwist(arguments, &output);
+        if (got != list[i].status) print_error("%s%s", arguments, output);
+        assert_int_equal(got, list[i].status);
+        assert_string_equal(output, list[i].text);
+        free(output);
+    }
+}
+
 static void wrong_options_are_told(void **state)
 {
     (void)state;
@@ -194,6 +258,8 @@ int main(void)
         cmocka_unit_test(a_trade_shape_may_be_piped_in),
         cmocka_unit_test(json_goes_to_standard_output_or_a_file),
         cmocka_unit_test(dimensions_may_be_set),
+        cmocka_unit_test(load_cases_and_probes_are_printed),
+        cmocka_unit_test(wrong_cases_and_probes_are_told),
         cmocka_unit_test(wrong_options_are_told),
         cmocka_unit_test(wrong_files_are_told),
         cmocka_unit_test(a_tolerance_not_reached_has_its_own_status),

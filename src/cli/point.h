@@ -1,0 +1,12 @@
+/* SPDX-License-Identifier: GPL-3.0-or-later
+ * Pairs of numbers as options take them: X,Y. */
+#ifndef UTW_CLI_POINT_H
+#define UTW_CLI_POINT_H
+
+#include "cli/command.h"
+
+/** Read text of the form X,Y, two finite decimal numbers. Returns CLI_DONE, or CLI_USAGE after a
+ * message that names the command and the option. */
+int cli_read_point(const cli_call *call, const char *option, const char *text, double xy[2]);
+
+#endif
