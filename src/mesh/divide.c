@@ -8,6 +8,7 @@
 #include "base/status.h"
 #include "base/vec2.h"
 #include "mesh/walls.h"
+#include "outline/net_shape.h"
 
 /* A side per so many wall thicknesses. The study of grading and order on five profiles found 1
  * to 1.5 to be cheapest. */
@@ -16,8 +17,9 @@
  * wedge's sake (its first sample lies at a sixth of it, and it may be twice the size). */
 #define WEDGE 2.5
 /* Growth of the size with the distance along the boundary. */
-#define GROWTH 1.7
-#define DEEPEST 24 /* halvings of one curve */
+#define GROWTH     1.7
+#define DEEPEST    24 /* halvings of one curve */
+#define RE_ENTRANT (185 * UTW_PI / 180)
 
 /* A piece of a net edge with the size wanted there. */
 typedef struct span {
@@ -112,6 +114,25 @@ static utw_status grade_ends(divider *d, utw_error *err)
     return st;
 }
 
+/* What happens at a re-entrant corner has the size of the shorter edge at it: there a side is at
+ * most as long as the edge. */
+static utw_status note_re_entrant(divider *d, utw_error *err)
+{
+    int *node = NULL, n = 0;
+    const utw_status st = utw_net_sharp_corners(d->net, RE_ENTRANT, &node, &n, err);
+    if (st != UTW_OK) return st;
+    for (int k = 0; k < n; k++) d->node_h[node[k]] = 0; /* a mark, for the time being */
+    for (size_t i = 0; i < d->list.n; i++) {
+        span *s = &d->list.s[i];
+        const utw_net_edge *e = &d->net->edge[s->edge];
+        if ((s->t0 == 0 && d->node_h[e->from] == 0) || (s->t1 == 1 && d->node_h[e->to] == 0))
+            s->h = fmin(s->h, s->length);
+    }
+    for (int k = 0; k < n; k++) d->node_h[node[k]] = UTW_INFINITY;
+    utw_free(node);
+    return UTW_OK;
+}
+
 static double grown(double h, double distance)
 {
     return h + GROWTH * distance;
@@ -199,6 +220,7 @@ utw_status utw_division_create(const utw_net *net, double scale, utw_division **
     /* a curve that sees no wall takes its own length */
     for (size_t i = 0; i < d.list.n; i++)
         d.list.s[i].h = fmin(d.list.s[i].h, 1e3 * d.list.s[i].length);
+    UTW_TRY(note_re_entrant(&d, err));
     UTW_TRY(grade_ends(&d, err));
     for (int pass = 0; pass < 20 && smooth_once(&d); pass++) continue;
     UTW_TRY_ALLOC(out = utw_alloc(1, sizeof *out));

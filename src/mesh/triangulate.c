@@ -7,6 +7,7 @@
 #include "base/memory.h"
 #include "base/status.h"
 #include "base/vec2.h"
+#include "mesh/sizes.h"
 
 enum { LINE_TYPE = 1, TRIANGLE_TYPE = 2 }; /* Gmsh's numbers for elements of two and three nodes */
 
@@ -229,18 +230,30 @@ done:
     return st;
 }
 
+/* Gmsh spreads sizes into the interior as means over triangles of boundary points, which forgets
+ * small features at once: it is told the size itself. */
+static double size_at(int dim, int tag, double x, double y, double z, void *sizes)
+{
+    (void)dim, (void)tag, (void)z;
+    return utw_sizes_at(sizes, (double[2]){x, y});
+}
+
 static utw_status generate(boundary *b, utw_error *err)
 {
     utw_status st = UTW_E_INTERNAL;
     int ierr = 0;
+    utw_sizes *sizes = NULL;
+    UTW_TRY(utw_sizes_create(b->n_point, (const double(*)[2])b->xy, b->size, &sizes, err));
     gmshModelAdd("section", &ierr);
     UTW_TRY(give_lines(b, err));
     UTW_TRY(give_parts(b, err));
     gmshModelGeoSynchronize(&ierr);
     UTW_TRY(give_sides(b, err));
+    if (!ierr) gmshModelMeshSetSizeCallback(size_at, sizes, &ierr);
     if (!ierr) gmshModelMeshGenerate(2, &ierr);
     st = ierr ? gmsh_failed(err, "fill the outline with triangles") : UTW_OK;
 done:
+    utw_sizes_free(sizes);
     return st;
 }
 
@@ -401,7 +414,8 @@ utw_status utw_mesh_triangulate(const utw_net *net, const utw_division *division
     gmshOptionSetNumber("General.Terminal", 0, &ierr);
     gmshOptionSetNumber("General.AbortOnError", 0, &ierr);
     gmshOptionSetNumber("General.Verbosity", 0, &ierr);
-    gmshOptionSetNumber("Mesh.Algorithm", 6, &ierr); /* frontal-Delaunay */
+    /* Delaunay: the frontal one leaves fans of needles where sizes grow fast */
+    gmshOptionSetNumber("Mesh.Algorithm", 5, &ierr);
     gmshOptionSetNumber("Mesh.MaxNumThreads2D", 1, &ierr);
     gmshOptionSetNumber("Mesh.MeshOnlyEmpty", 1, &ierr); /* the lines are meshed already */
     gmshOptionSetNumber("Mesh.Smoothing", 0, &ierr);

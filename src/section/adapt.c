@@ -8,14 +8,14 @@
 #include "base/clock.h"
 #include "base/memory.h"
 #include "base/status.h"
-#include "mesh/blend.h"
-#include "mesh/layers.h"
+#include "mesh/refine.h"
 
 /* An order more multiplies an element's share of the gap by about this (measured on five profiles).
  */
 #define DECAY 0.15
 enum {
-    LARGEST_STEP = 4, /* orders added at once */
+    FIRST_ORDER = 3,
+    LARGEST_STEP = 6, /* orders added at once */
     SPLIT_ORDER = 10  /* an element of this order that still dominates is cut in four */
 };
 
@@ -109,133 +109,34 @@ static utw_status solve_once(loop *l, utw_error *err)
     return UTW_OK;
 }
 
-/* A finer mesh in the making. */
-typedef struct finer {
-    utw_mesh *mesh;
-    unsigned char *order;
-} finer;
-
-/* Orders of the children after a cut: those of their parents. */
-static utw_status inherit(finer *f, utw_error *err)
-{
-    unsigned char *order = utw_alloc((size_t)f->mesh->n_tri, 1);
-    if (order == NULL) return utw_fail(err, UTW_E_NOMEM, "out of memory (%s)", __func__);
-    for (int t = 0; t < f->mesh->n_tri; t++) order[t] = f->order[f->mesh->tri[t].from];
-    utw_free(f->order);
-    f->order = order;
-    return UTW_OK;
-}
-
-/* A triangle bent more than this is cut from the middle of its curved sides only: other children
- * would fold. */
-#define BENT 0.7
-
-static double straightness(const utw_mesh *mesh, int t)
-{
-    utw_blend blend;
-    utw_blend_of(mesh, &mesh->tri[t], &blend);
-    return utw_blend_quality(&blend);
-}
-
-/* Two layers more at the corners of the outline in marked triangles: what is left there is the
- * corner's own singularity. Nodes with bent triangles around them get none. served[t] is set for
- * the triangles that are cut by it. */
-static utw_status plan_layers(const utw_mesh *mesh, const unsigned char *wanted, int *layers,
-                              unsigned char *served, utw_error *err)
-{
-    utw_status st = UTW_E_INTERNAL;
-    unsigned char *bent;
-    const int n = mesh->net->n_node;
-    UTW_TRY_ALLOC(bent = utw_alloc((size_t)n, 1));
-    for (int t = 0; t < mesh->n_tri; t++) {
-        const int *node = mesh->tri[t].node;
-        if ((node[0] >= n && node[1] >= n && node[2] >= n) || straightness(mesh, t) >= BENT)
-            continue;
-        for (int k = 0; k < 3; k++)
-            if (node[k] < n) bent[node[k]] = 1;
-    }
-    for (int t = 0; t < mesh->n_tri; t++)
-        for (int k = 0; wanted[t] && k < 3; k++) {
-            const int node = mesh->tri[t].node[k];
-            if (node < n && !bent[node]) layers[node] = served[t] = 2;
-        }
-    st = UTW_OK;
-done:
-    utw_free(bent);
-    return st;
-}
-
-/* Cut marked triangles in four, or across their curved sides; their neighbours follow. */
-static utw_status cut_in_four(finer *f, const unsigned char *wanted, const unsigned char *served,
-                              utw_error *err)
-{
-    utw_status st = UTW_E_INTERNAL;
-    utw_mesh *mesh = f->mesh;
-    unsigned char *marked;
-    int any = 0;
-    UTW_TRY_ALLOC(marked = utw_alloc((size_t)mesh->n_edge, 1));
-    for (int t = 0; t < mesh->n_tri; t++) {
-        if (!wanted[t] || served[t]) continue;
-        const int all = straightness(mesh, t) >= BENT;
-        for (int k = 0; k < 3; k++)
-            if (all || utw_mesh_is_curved(mesh, &mesh->tri[t], k))
-                any = marked[mesh->tri[t].side[k]] = 1;
-    }
-    if (any) {
-        UTW_TRY(utw_mesh_halve(mesh, marked, err));
-        UTW_TRY(inherit(f, err));
-    }
-    st = UTW_OK;
-done:
-    utw_free(marked);
-    return st;
-}
-
-/* Refine the copy of the mesh at marked triangles: corners of the outline get layers, the others
- * are cut. */
-static utw_status refine_copy(finer *f, const unsigned char *wanted, utw_error *err)
-{
-    utw_status st = UTW_E_INTERNAL;
-    int *layers = NULL;
-    unsigned char *served = NULL;
-    UTW_TRY_ALLOC(layers = utw_alloc((size_t)f->mesh->net->n_node, sizeof *layers));
-    UTW_TRY_ALLOC(served = utw_alloc((size_t)f->mesh->n_tri, 1));
-    UTW_TRY(plan_layers(f->mesh, wanted, layers, served, err));
-    UTW_TRY(cut_in_four(f, wanted, served, err));
-    UTW_TRY(utw_mesh_cut_layers(f->mesh, layers, err));
-    UTW_TRY(inherit(f, err));
-    st = UTW_OK;
-done:
-    utw_free(layers);
-    utw_free(served);
-    return st;
-}
-
-/* Go over to a finer mesh. *done is 0, and all stays as it is, when an element would fold. */
+/* Go over to a finer mesh; children have the orders of their parents. *split_done is 0, and all
+ * stays as it is, when an element would fold. */
 static utw_status split(loop *l, const unsigned char *wanted, int *split_done, utw_error *err)
 {
     utw_status st = UTW_E_INTERNAL;
-    finer f = {NULL, NULL};
-    *split_done = 0;
-    UTW_TRY(utw_mesh_copy(l->s->mesh, &f.mesh, err));
-    UTW_TRY_ALLOC(f.order = utw_alloc((size_t)f.mesh->n_tri, 1));
-    memcpy(f.order, l->order, (size_t)f.mesh->n_tri);
-    UTW_TRY(refine_copy(&f, wanted, err));
-    if (utw_mesh_quality(f.mesh) >= UTW_LEAST_QUALITY) {
+    utw_mesh *finer = NULL;
+    int *parent = NULL;
+    unsigned char *order = NULL;
+    UTW_TRY(utw_mesh_refine(l->s->mesh, wanted, &finer, &parent, err));
+    *split_done = finer != NULL;
+    if (finer != NULL) {
+        UTW_TRY_ALLOC(order = utw_alloc((size_t)finer->n_tri, 1));
+        for (int t = 0; t < finer->n_tri; t++) order[t] = l->order[parent[t]];
         utw_field_free(l->s->field);
         l->s->field = NULL;
         utw_mesh_free(l->s->mesh);
         utw_free(l->order);
-        l->s->mesh = f.mesh;
-        l->order = f.order;
-        f = (finer){NULL, NULL};
+        l->s->mesh = finer;
+        l->order = order;
+        finer = NULL;
+        order = NULL;
         UTW_TRY(renew_mesh_data(l, err));
-        *split_done = 1;
     }
     st = UTW_OK;
 done:
-    utw_mesh_free(f.mesh);
-    utw_free(f.order);
+    utw_mesh_free(finer);
+    utw_free(parent);
+    utw_free(order);
     return st;
 }
 
@@ -268,6 +169,18 @@ static int raise_orders(loop *l, unsigned char *wanted)
     return raised;
 }
 
+/* Where marked elements cannot be cut, the orders beyond that of cutting are all that is left. */
+static int raise_to_last(loop *l, const unsigned char *wanted)
+{
+    int raised = 0;
+    for (int t = 0; t < l->s->mesh->n_tri; t++) {
+        if (!wanted[t] || l->order[t] >= UTW_ORDER_MAX) continue;
+        l->order[t]++;
+        raised++;
+    }
+    return raised;
+}
+
 /* Choose orders and cut elements for the next round; *changed is 0 when nothing is left to do. */
 static utw_status refine(loop *l, int *changed, utw_error *err)
 {
@@ -278,7 +191,7 @@ static utw_status refine(loop *l, int *changed, utw_error *err)
     if (memchr(wanted, 1, (size_t)l->s->mesh->n_tri) != NULL) {
         int split_done;
         UTW_TRY(split(l, wanted, &split_done, err));
-        *changed |= split_done;
+        *changed |= split_done || raise_to_last(l, wanted) > 0;
     }
     st = UTW_OK;
 done:
@@ -292,7 +205,7 @@ static utw_status run(loop *l, utw_error *err)
     const utw_options *o = l->options;
     const int n = l->s->mesh->n_tri;
     UTW_TRY_ALLOC(l->order = utw_alloc((size_t)n, 1));
-    memset(l->order, o->fixed_order > 0 ? o->fixed_order : o->tolerance > 3e-6 ? 3 : 4, (size_t)n);
+    memset(l->order, o->fixed_order > 0 ? o->fixed_order : FIRST_ORDER, (size_t)n);
     UTW_TRY(renew_mesh_data(l, err));
     for (;;) {
         UTW_TRY(solve_once(l, err));

@@ -25,7 +25,7 @@ typedef struct utw_solved {
 } utw_solved;
 
 /** Solve on a net about its centroid. With options->fixed_order this order everywhere, once. Orders
- * start at 3 or 4 and rise element by element by the predicted decay of its share of the gap (a
+ * start at 3 and rise element by element by the predicted decay of its share of the gap (a
  * factor of about 0.15 an order was measured); elements whose order is used up are cut in four.
  * [in] net is taken: utw_solved_clear() frees it, also after a failure. [in] poisson: 1 when
  * Poisson's ratio matters (the anticlastic pairs are then refined too). UTW_E_MESH, UTW_E_SINGULAR,

@@ -46,7 +46,8 @@ utw_mesh *mesh_two_triangles(utw_net **net)
         *tri = (utw_triangle){.node = {0, t + 1, t + 2}, .curve = {-1, -1, -1}};
         for (int k = 0; k < 3; k++)
             for (int e = 0; e < 4; e++)
-                if ((*net)->edge[e].from == tri->node[k] && (*net)->edge[e].to == tri->node[(k + 1) % 3]) {
+                if ((*net)->edge[e].from == tri->node[k] &&
+                    (*net)->edge[e].to == tri->node[(k + 1) % 3]) {
                     tri->curve[k] = e;
                     tri->t[k][1] = 1;
                 }
@@ -74,7 +75,7 @@ double mesh_area(const utw_mesh *mesh)
     return area;
 }
 
-/* ---- checks -------------------------------------------------------------------------------------- */
+/* ---- checks ---------------------------------------------------------------------------- */
 
 static void check_side(const utw_mesh *mesh, int t, int k)
 {
@@ -133,7 +134,8 @@ void mesh_check(const utw_mesh *mesh)
     int sides = 0;
     for (int t = 0; t < mesh->n_tri; t++) {
         const utw_triangle *tri = &mesh->tri[t];
-        assert_true(utw_turn(mesh->xy[tri->node[0]], mesh->xy[tri->node[1]], mesh->xy[tri->node[2]]) > 0);
+        assert_true(
+            utw_turn(mesh->xy[tri->node[0]], mesh->xy[tri->node[1]], mesh->xy[tri->node[2]]) > 0);
         for (int k = 0; k < 3; k++) {
             check_side(mesh, t, k);
             used[tri->node[k]] = 1;
@@ -143,7 +145,8 @@ void mesh_check(const utw_mesh *mesh)
     for (int e = 0; e < mesh->n_edge; e++) sides += mesh->edge[e].tri[1] >= 0 ? 2 : 1;
     assert_int_equal(sides, 3 * mesh->n_tri);
     for (int i = 0; i < mesh->net->n_node; i++)
-        assert_true(mesh->xy[i][0] == mesh->net->node[i][0] && mesh->xy[i][1] == mesh->net->node[i][1]);
+        assert_true(mesh->xy[i][0] == mesh->net->node[i][0] &&
+                    mesh->xy[i][1] == mesh->net->node[i][1]);
     check_cover(mesh);
     utw_free(used);
 }

@@ -1,0 +1,102 @@
+/* SPDX-License-Identifier: GPL-3.0-or-later
+ * Least of size plus growth times distance, by branch and bound over a tree of boxes. */
+#include "mesh/sizes.h"
+
+#include "base/memory.h"
+#include "base/status.h"
+#include "base/vec2.h"
+
+/* A range of points: the box around them and the least size among them. */
+typedef struct range {
+    double lo[2], hi[2], least;
+} range;
+
+struct utw_sizes {
+    int n;
+    double greatest;
+    double (*xy)[2],
+        *size; /* [n], in the order given: neighbours on the boundary are neighbours in the plane */
+    range *tree; /* [2 n - 1], preorder: a range of k points has 2k - 1 nodes */
+};
+
+static void build(utw_sizes *s, int node, int i, int j)
+{
+    range *r = &s->tree[node];
+    if (j - i == 1) {
+        for (int k = 0; k < 2; k++) r->lo[k] = r->hi[k] = s->xy[i][k];
+        r->least = s->size[i];
+        return;
+    }
+    const int m = (i + j) / 2, second = node + 2 * (m - i);
+    build(s, node + 1, i, m);
+    build(s, second, m, j);
+    const range *a = &s->tree[node + 1], *b = &s->tree[second];
+    for (int k = 0; k < 2; k++) {
+        r->lo[k] = fmin(a->lo[k], b->lo[k]);
+        r->hi[k] = fmax(a->hi[k], b->hi[k]);
+    }
+    r->least = fmin(a->least, b->least);
+}
+
+utw_status utw_sizes_create(int n, const double (*xy)[2], const double *size, utw_sizes **sizes,
+                            utw_error *err)
+{
+    utw_status st = UTW_E_INTERNAL;
+    utw_sizes *s;
+    UTW_TRY_ALLOC(s = utw_alloc(1, sizeof *s));
+    UTW_TRY_ALLOC(s->xy = utw_alloc((size_t)n, sizeof *s->xy));
+    UTW_TRY_ALLOC(s->size = utw_alloc((size_t)n, sizeof *s->size));
+    UTW_TRY_ALLOC(s->tree = utw_alloc(2 * (size_t)n, sizeof *s->tree));
+    for (int i = 0; i < n; i++) s->greatest = fmax(s->greatest, size[i]);
+    for (int i = 0; i < n; i++) {
+        if (size[i] >= 0.5 * s->greatest) continue;
+        s->xy[s->n][0] = xy[i][0];
+        s->xy[s->n][1] = xy[i][1];
+        s->size[s->n++] = size[i];
+    }
+    if (s->n > 0) build(s, 0, 0, s->n);
+    *sizes = s;
+    s = NULL;
+    st = UTW_OK;
+done:
+    utw_sizes_free(s);
+    return st;
+}
+
+void utw_sizes_free(utw_sizes *sizes)
+{
+    if (sizes == NULL) return;
+    utw_free(sizes->xy);
+    utw_free(sizes->size);
+    utw_free(sizes->tree);
+    utw_free(sizes);
+}
+
+/* No point of the range can give less than this. */
+static double bound(const range *r, const double p[2])
+{
+    double d[2];
+    for (int k = 0; k < 2; k++) d[k] = fmax(0, fmax(r->lo[k] - p[k], p[k] - r->hi[k]));
+    return r->least + UTW_SIZE_GROWTH * utw_norm(d);
+}
+
+static void descend(const utw_sizes *s, int node, int i, int j, const double p[2], double *best)
+{
+    if (j - i == 1) {
+        *best = fmin(*best, bound(&s->tree[node], p));
+        return;
+    }
+    const int m = (i + j) / 2, second = node + 2 * (m - i);
+    const double a = bound(&s->tree[node + 1], p), b = bound(&s->tree[second], p);
+    /* the more promising half first, so that the other one is more often left out */
+    if (a <= b && a < *best) descend(s, node + 1, i, m, p, best);
+    if (b < *best) descend(s, second, m, j, p, best);
+    if (a > b && a < *best) descend(s, node + 1, i, m, p, best);
+}
+
+double utw_sizes_at(const utw_sizes *sizes, const double xy[2])
+{
+    double best = sizes->greatest;
+    if (sizes->n > 0) descend(sizes, 0, 0, sizes->n, xy, &best);
+    return best;
+}
