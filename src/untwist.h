@@ -537,6 +537,74 @@ UTW_API UTW_CHECK utw_status utw_thin_at(const utw_thin *thin, int wall, double 
                                          const utw_thin_load *load, utw_thin_station *station,
                                          utw_error *err);
 
+/* ---- the midline of an outline ------------------------------------------------------------------- */
+
+/** What a wall of a found midline is. */
+typedef enum utw_wall_kind {
+    UTW_WALL_PLATE = 0, /* a wall with two faces */
+    UTW_WALL_BEND = 1,  /* the rounding of a corner between two walls: an arc that touches both, its mean radius at
+                           most 5.5 thicknesses */
+    UTW_WALL_LUMP = 2,  /* a thick part, such as a bulb, as a wall of its own width with its area */
+    UTW_WALL_LINK = 3   /* joins midlines that lie side by side where walls meet */
+} utw_wall_kind;
+
+/** A wall of an idealisation, beside what utw_midline says of it. */
+typedef struct utw_wall_info {
+    utw_wall_kind kind;
+    double length;      /* from node to node [L] */
+    double thickness;   /* mean [L] */
+    double slenderness; /* length over thickness of the plate it is part of: pieces that go on smoothly with about
+                           the same thickness are one [1] */
+    int slender;        /* 1: slenderness of at least 3, the least to be thought of as a wall */
+} utw_wall_info;
+
+/** The figures of an idealisation. */
+typedef struct utw_idealisation_info {
+    int given;                /* 1: the midline the section was drawn by; 0: found in the outline */
+    int walls, bends, links;  /* plates and lumps; bends; links */
+    int lumps;                /* of the walls */
+    int junctions;            /* nodes where three or more walls meet */
+    int cells, holes;         /* of the midline; of the outline */
+    double length, thickness; /* of all walls [L]; mean: area over length [L] */
+    double area_share;        /* of the area in corners, junctions and fillets: not between two faces of a wall */
+    double slender_share;     /* of the area in slender walls */
+    double slenderness;       /* greatest of all walls */
+    double area_error;        /* area of the midline over that of the section, less 1. Corners cancel, a tee is
+                                 counted twice for half a wall, fillets are missing */
+    double length_error;      /* length of the walls and half the width of free ends over half the perimeter, less 1 */
+} utw_idealisation_info;
+
+/** The thin-walled idealisation of a section. */
+typedef struct utw_idealisation utw_idealisation;
+
+/** Find the midline of a section, or take the one it was drawn by. [in] outline, borrowed. [out] *idealisation, returned
+ *  owned: utw_idealisation_free().
+ *  UTW_E_NO_THIN_WALL when the section has no thin-walled sense: the message is a sentence with the figures.
+ *  UTW_E_OUTLINE, UTW_E_MESH, UTW_E_NOMEM.
+ *  Method: docs/compare.md; chordal axis of the constrained Delaunay triangulation (Prasad 1997). */
+UTW_API UTW_CHECK utw_status utw_idealise(const utw_outline *outline, utw_idealisation **idealisation,
+                                          utw_error *err);
+
+/** Free it; NULL is allowed. */
+UTW_API void utw_idealisation_free(utw_idealisation *idealisation);
+
+/** Its midline, in the drawing's coordinates. Returned borrowed. */
+UTW_API const utw_midline *utw_idealisation_midline(const utw_idealisation *idealisation);
+
+/** What its thin-walled theory says. Returned borrowed. */
+UTW_API const utw_thin *utw_idealisation_thin(const utw_idealisation *idealisation);
+
+/** Wall `wall` of the midline; NULL when out of range. Returned borrowed. */
+UTW_API const utw_wall_info *utw_idealisation_wall(const utw_idealisation *idealisation, int wall);
+
+/** Its figures. Returned borrowed. */
+UTW_API const utw_idealisation_info *utw_idealisation_get(const utw_idealisation *idealisation);
+
+/** Why a found midline is not to be trusted: a sentence with figures; "" when there is no reason. It has as many cells as
+ *  the section has holes, its area is that of the section within 10 % and its length that of the boundary within 25 %,
+ *  or the sentence says so. Returned borrowed. */
+UTW_API const char *utw_idealisation_doubt(const utw_idealisation *idealisation);
+
 /* ---- reports ------------------------------------------------------------------------------------- */
 
 /** What a report tells. Start from UTW_REPORT_INIT; what stays NULL is left out. */
