@@ -87,7 +87,8 @@ typedef struct utw_outline utw_outline;
  *  part, loop, vertex and remedy. */
 UTW_API UTW_CHECK utw_status utw_outline_read(const char *path, utw_outline **outline, utw_error *err);
 
-/** The same from text[n] in memory; `name` stands for the file in messages. */
+/** The same from text[n] in memory; `name` stands for the file in messages, and files the section names
+ *  (docs/shapes.md, aerofoil) are looked for in its folder. */
 UTW_API UTW_CHECK utw_status utw_outline_parse(const char *text, size_t n, const char *name,
                                                utw_outline **outline, utw_error *err);
 

@@ -38,7 +38,7 @@ static int list_shapes(void)
     }
     utw_text_add(&text,
                  "\n'untwist shape NAME' shows what the letters mean; those in [] may be left "
-                 "out.\n");
+                 "out.\nAerofoil boxes are drawn in section files: docs/shapes.md.\n");
     return print(&text);
 }
 

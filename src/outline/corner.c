@@ -191,7 +191,8 @@ utw_corner_fit utw_corner_make(const utw_corner *c, utw_corner_cut *cut)
     const double cross = utw_cross(t0, t1);
     if (fabs(cross) < STRAIGHT) return utw_dot(t0, t1) > 0 ? UTW_CORNER_STRAIGHT : UTW_CORNER_BACK;
     if (c->kind == UTW_CORNER_CHAMFER) return chamfer(c, cut);
-    if (c->before.curve[0].kind == UTW_LINE && c->after.curve[0].kind == UTW_LINE)
+    if (c->before.n == 1 && c->before.curve[0].kind == UTW_LINE && c->after.n == 1 &&
+        c->after.curve[0].kind == UTW_LINE)
         return round_lines(c, t0, t1, cut);
     return round_any(c, cross > 0 ? 1 : -1, cut);
 }

@@ -8,6 +8,9 @@
 #include "base/status.h"
 #include "base/vec2.h"
 
+/* Between samples a cubic may be farther off than at them (measured: by less than a quarter). */
+#define MARGIN 0.75
+
 enum { DEEPEST = 20, SAMPLES = 7 }; /* halvings: a millionth of the curve */
 
 /* What a cubic takes over from the curve at one of its ends. */
@@ -57,51 +60,105 @@ static int handles(const end *a, const end *b, double h[2])
     return h[0] > 0.1 * length && h[0] < length && h[1] > 0.1 * length && h[1] < length;
 }
 
-/* Distance of a point from a cubic, from a guess of its parameter. */
-static double off_by(const utw_curve *c, const double p[2], double t)
+/* Points of a piece of the curve, and the parameters of the cubic next to them. */
+typedef struct samples {
+    double p[SAMPLES][2], t[SAMPLES];
+} samples;
+
+/* The parameter of a cubic nearest to p, from a guess, by Newton's iteration. */
+static double nearest(const utw_curve *c, const double p[2], double t)
 {
-    double q[2], d1[2], d2[2];
     for (int i = 0; i < 4; i++) {
+        double q[2], d1[2], d2[2];
         utw_curve_point(c, t, q);
         utw_curve_d1(c, t, d1);
         utw_curve_d2(c, t, d2);
         const double r[2] = {q[0] - p[0], q[1] - p[1]};
-        const double slope = utw_dot(d1, d1) + utw_dot(r, d2);
+        const double slope = utw_dot(d1, d1) + utw_dot(r, d2), step = utw_dot(r, d1) / slope;
         if (!(slope > 0)) break;
-        t -= utw_dot(r, d1) / slope;
+        t -= step;
         t = t < 0 ? 0 : t > 1 ? 1 : t;
+        if (fabs(step) < 1e-4) break; /* the distance is right to the square of that */
     }
-    utw_curve_point(c, t, q);
-    return utw_distance(p, q);
+    return t;
 }
 
-static double deviation(utw_fit_curve f, const void *context, const utw_curve *c, double s0,
-                        double s1)
+/* How far the cubic is off at the samples, whose parameters are brought up to date. */
+static double deviation(const utw_curve *c, samples *x)
 {
     double worst = 0;
-    for (int i = 1; i <= SAMPLES; i++) {
-        double p[2], d1[2], d2[2];
-        const double t = (double)i / (SAMPLES + 1);
-        f(context, s0 + t * (s1 - s0), p, d1, d2);
-        const double off = off_by(c, p, t);
+    for (int i = 0; i < SAMPLES; i++) {
+        double q[2];
+        x->t[i] = nearest(c, x->p[i], x->t[i]);
+        utw_curve_point(c, x->t[i], q);
+        const double off = utw_distance(x->p[i], q);
         worst = off <= worst ? worst : off; /* a NaN stays */
     }
     return worst;
 }
 
-/* The better of two cubics between two ends, and how far it is off. */
+/* Handle lengths that bring the cubic nearer to the samples across it, by a step of Gauss and
+ * Newton. Returns 0 when they do not matter (a straight piece) or would turn over. */
+static int step_handles(const end *a, const end *b, const utw_curve *c, const samples *x,
+                        double h[2])
+{
+    double m[3] = {0, 0, 0}, g[2] = {0, 0};
+    for (int i = 0; i < SAMPLES; i++) {
+        double q[2], d[2];
+        const double t = x->t[i], s = 1 - t;
+        utw_curve_point(c, t, q);
+        utw_curve_d1(c, t, d);
+        const double v = utw_norm(d), n[2] = {-d[1] / v, d[0] / v},
+                     r[2] = {q[0] - x->p[i][0], q[1] - x->p[i][1]};
+        const double j0 = 3 * s * s * t * utw_dot(n, a->u), j1 = -3 * s * t * t * utw_dot(n, b->u),
+                     off = utw_dot(n, r);
+        m[0] += j0 * j0, m[1] += j0 * j1, m[2] += j1 * j1;
+        g[0] += j0 * off, g[1] += j1 * off;
+    }
+    const double det = m[0] * m[2] - m[1] * m[1];
+    if (!(det > 1e-6 * m[0] * m[2]) || !(m[0] > 1e-10 && m[2] > 1e-10)) return 0;
+    h[0] -= (g[0] * m[2] - g[1] * m[1]) / det;
+    h[1] -= (g[1] * m[0] - g[0] * m[1]) / det;
+    return h[0] > 0 && h[1] > 0;
+}
+
+/* The best cubic found between two ends, and how far it is off. */
 static double try_piece(utw_fit_curve f, const void *context, const end *a, const end *b,
-                        utw_curve *curve)
+                        double tolerance, utw_curve *curve)
 {
     const double step = fabs(b->s - a->s) / 3;
-    *curve = cubic(a, b, step * a->speed, step * b->speed);
-    double off = deviation(f, context, curve, a->s, b->s), h[2];
-    if (!handles(a, b, h)) return off;
-    const utw_curve other = cubic(a, b, h[0], h[1]);
-    const double other_off = deviation(f, context, &other, a->s, b->s);
-    if (!(other_off < off)) return off;
-    *curve = other;
-    return other_off;
+    double h[2] = {step * a->speed, step * b->speed}, g[2], d1[2], d2[2];
+    samples x, y;
+    for (int i = 0; i < SAMPLES; i++) {
+        x.t[i] = (double)(i + 1) / (SAMPLES + 1);
+        f(context, a->s + x.t[i] * (b->s - a->s), x.p[i], d1, d2);
+    }
+    y = x;
+    *curve = cubic(a, b, h[0], h[1]);
+    double off = deviation(curve, &x);
+    if (handles(a, b, g)) {
+        const utw_curve other = cubic(a, b, g[0], g[1]);
+        const double other_off = deviation(&other, &y);
+        if (other_off < off) {
+            off = other_off;
+            *curve = other;
+            x = y;
+            memcpy(h, g, sizeof h);
+        }
+    }
+    for (int i = 0; i < 6 && off > 0.5 * tolerance; i++) {
+        y = x;
+        memcpy(g, h, sizeof g);
+        if (!step_handles(a, b, curve, &y, g)) break;
+        const utw_curve other = cubic(a, b, g[0], g[1]);
+        const double other_off = deviation(&other, &y);
+        if (!(other_off < 0.9 * off)) break;
+        off = other_off;
+        *curve = other;
+        x = y;
+        memcpy(h, g, sizeof h);
+    }
+    return off;
 }
 
 utw_status utw_fit_append(utw_fit *fit, utw_curve curve, utw_error *err)
@@ -128,7 +185,7 @@ utw_status utw_fit_cubics(utw_fit_curve f, const void *context, double s0, doubl
     while (n > 0) {
         utw_curve curve;
         const end *next = &stack[n - 1];
-        if (try_piece(f, context, &here, next, &curve) <= tolerance) {
+        if (try_piece(f, context, &here, next, MARGIN * tolerance, &curve) <= MARGIN * tolerance) {
             const utw_status st = utw_fit_append(fit, curve, err);
             if (st != UTW_OK) return st;
             here = *next;

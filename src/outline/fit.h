@@ -27,8 +27,8 @@ utw_status utw_fit_append(utw_fit *fit, utw_curve curve, utw_error *err);
  * piece, measured to the nearest point of the cubic; pieces are halved until it is. Method:
  * geometric Hermite interpolation, of sixth order in the piece's length (de Boor, Hoellig and
  * Sabin, Computer Aided Geometric Design 4 (1987) 269-278); plain Hermite where that has no
- * solution. UTW_E_OUTLINE when a millionth of the curve cannot be followed (it is not smooth),
- * UTW_E_NOMEM. */
+ * solution; then least squares across the curve for the lengths of the handles. UTW_E_OUTLINE when
+ * a millionth of the curve cannot be followed (it is not smooth), UTW_E_NOMEM. */
 utw_status utw_fit_cubics(utw_fit_curve f, const void *context, double s0, double s1,
                           const double from[2], const double to[2], double tolerance, utw_fit *fit,
                           utw_error *err);

@@ -64,6 +64,9 @@ struct utw_outline {
 void utw_loop_clear(utw_loop *loop);
 void utw_part_clear(utw_part *part);
 
+/** Mirror, turn and shift a part; quarter turns are exact. Loops keep their direction. */
+void utw_part_place(utw_part *part, const utw_placement *placement);
+
 /** Signed area of a loop, positive counter-clockwise [L^2]; exact. */
 double utw_loop_area(const utw_loop *loop);
 

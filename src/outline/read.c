@@ -79,12 +79,18 @@ static void name_place(const utw_reader *r)
     utw_error_place(r->err, r->part, r->loop, r->vertex);
 }
 
-static utw_status parse(const char *text, size_t n, int n_set, const char *const *set,
-                        utw_outline **outline, utw_error *err)
+static utw_status parse(const char *text, size_t n, const char *name, int n_set,
+                        const char *const *set, utw_outline **outline, utw_error *err)
 {
     utw_status st = UTW_E_INTERNAL;
     utw_json *json = NULL;
-    utw_reader r = {.err = err, .n_set = n_set, .set = set, .part = -1, .loop = -1, .vertex = -1};
+    utw_reader r = {.err = err,
+                    .path = name,
+                    .n_set = n_set,
+                    .set = set,
+                    .part = -1,
+                    .loop = -1,
+                    .vertex = -1};
     const double start = utw_seconds();
     UTW_TRY(utw_json_parse(text, n, &json, err));
     UTW_TRY(utw_let_create(0, &r.let, err));
@@ -119,7 +125,7 @@ utw_status utw_outline_parse_with(const char *text, size_t n, const char *name, 
             err, UTW_E_ARGUMENT,
             "reading a section: text, name, outline and each of set[n_set] must be given");
     utw_error_clear(&local);
-    const utw_status st = parse(text, n, n_set, set, outline, &local);
+    const utw_status st = parse(text, n, name, n_set, set, outline, &local);
     if (st == UTW_OK) return UTW_OK;
     utw_error_prefix(&local, "%.200s: ", name);
     if (err != NULL) *err = local;

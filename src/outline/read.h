@@ -22,6 +22,7 @@
 typedef struct utw_reader {
     utw_error *err; /* borrowed, never NULL */
     utw_outline *outline;
+    const char *path; /* of the section file, borrowed: files it names lie beside it */
     utw_let *let; /* named dimensions, perhaps none; for every number given as an expression */
     int n_set;    /* dimensions set from outside */
     const char *const *set; /* [n_set], borrowed: "t=5" */
@@ -87,6 +88,9 @@ utw_status utw_read_loop(utw_reader *r, const utw_json *value, const char *what,
 /** "shape" in place of "outline" and "holes". target: utw_part, whose loops are replaced. */
 utw_status utw_read_part_shape(utw_reader *r, const utw_json *value, const char *what,
                                void *target);
+
+/** "aerofoil" of a shape. [out] *part, owned by the caller: utw_part_clear(). */
+utw_status utw_read_aerofoil(utw_reader *r, const utw_json *value, utw_part *part);
 
 /** A material by its name: int *target is its index. UTW_E_MATERIAL when it is not defined. */
 utw_status utw_read_material_name(utw_reader *r, const utw_json *value, const char *what,

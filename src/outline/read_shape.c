@@ -14,11 +14,13 @@ enum { MOST_DIMENSIONS = 32 }; /* more are repetitions, which utw_shape_collect(
 /* A shape while it is read. */
 typedef struct shape_given {
     const char *name;
-    const utw_json *dimensions;
+    const utw_json *dimensions; /* of a trade shape, or the aerofoil */
     int material;
     double turn; /* [degrees] */
     utw_placement placement;
 } shape_given;
+
+static const char aerofoil[] = "aerofoil";
 
 /* Target of every shape's name: only one may be there. */
 static utw_status read_name(utw_reader *r, const utw_json *value, const char *what, void *target)
@@ -33,7 +35,7 @@ static utw_status read_name(utw_reader *r, const utw_json *value, const char *wh
     if (s->name != NULL)
         return utw_fail(r->err, UTW_E_SYNTAX, "\"shape\" is both \"%s\" and %s; keep one", s->name,
                         what);
-    s->name = utw_shape_find(name)->name;
+    s->name = strcmp(name, aerofoil) == 0 ? aerofoil : utw_shape_find(name)->name;
     s->dimensions = value;
     return UTW_OK;
 }
@@ -62,8 +64,9 @@ static utw_status read_given(utw_reader *r, const utw_json *value, const char *w
 {
     utw_key key[MOST_KEYS];
     int n = 0;
-    for (int i = 0; i < utw_shape_count() && n < MOST_KEYS - N_PLACEMENT; i++)
+    for (int i = 0; i < utw_shape_count() && n < MOST_KEYS - 1 - N_PLACEMENT; i++)
         key[n++] = (utw_key){utw_shape_at(i)->name, read_name, 0};
+    key[n++] = (utw_key){aerofoil, read_name, 0};
     for (int i = in_part; i < N_PLACEMENT; i++) key[n++] = placement_key[i];
     const utw_status st = utw_read_object(r, value, what, key, n, s, NULL);
     if (st != UTW_OK) return st;
@@ -80,6 +83,11 @@ static utw_status make(utw_reader *r, const shape_given *s, utw_part *part)
     const char *keys[MOST_DIMENSIONS];
     double values[MOST_DIMENSIONS];
     int n = 0;
+    if (s->name == aerofoil) {
+        const utw_status st = utw_read_aerofoil(r, s->dimensions, part);
+        if (st == UTW_OK) utw_part_place(part, &s->placement);
+        return st;
+    }
     for (const utw_json *m = utw_json_first(s->dimensions); m != NULL && n < MOST_DIMENSIONS;
          m = utw_json_next(m)) {
         char what[80];

@@ -11,6 +11,45 @@ static const struct {
     int part, loop, vertex;
     const char *message; /* without the name of the file */
 } row[] = {
+    {"aerofoil_edge_of_points", UTW_E_SYNTAX, -1, -1, -1,
+     "aerofoil: \"edge\" is for \"naca\"; the edge of a list of points is as listed"},
+    {"aerofoil_edge_unknown", UTW_E_SYNTAX, -1, -1, -1, "\"edge\" must be \"sharp\" or \"blunt\""},
+    {"aerofoil_naca_a_number", UTW_E_SYNTAX, -1, -1, -1,
+     "\"naca\" must be a text in double quotes, not a number"},
+    {"aerofoil_naca_and_points", UTW_E_SYNTAX, -1, -1, -1,
+     "aerofoil: \"naca\" and \"points\" are both given; keep one"},
+    {"aerofoil_naca_five_digits", UTW_E_SYNTAX, -1, -1, -1,
+     "\"23012\" is no NACA four-digit designation; it must be four digits, such as \"2412\""},
+    {"aerofoil_nose_unknown", UTW_E_SYNTAX, -1, -1, -1,
+     "\"nose\" must be \"solid\" or a part of the chord, not true or false"},
+    {"aerofoil_points_bad", UTW_E_SYNTAX, -1, -1, -1,
+     "aerofoil_points_bad.dat: line 4 is not two numbers: \"0.2\""},
+    {"aerofoil_points_missing", UTW_E_FILE, -1, -1, -1,
+     "no-such-list.dat: cannot be opened: No such file or directory"},
+    {"aerofoil_r_negative", UTW_E_OUTLINE, -1, -1, -1, "aerofoil: r = -0.5 must be 0 or more"},
+    {"aerofoil_r_too_large", UTW_E_OUTLINE, -1, -1, -1,
+     "aerofoil: r = 40 does not fit in the corner at (88, 21.58), before the section is placed; "
+     "the greatest that fits in this bay is 15.73"},
+    {"aerofoil_skin_empty", UTW_E_SYNTAX, -1, -1, -1,
+     "\"skin\" is empty; give a thickness, or [[part of chord, thickness], ...]"},
+    {"aerofoil_skin_station", UTW_E_SYNTAX, -1, -1, -1,
+     "a station of \"skin\" must be [part of chord, thickness], not a number"},
+    {"aerofoil_skin_too_thick", UTW_E_OUTLINE, -1, -1, -1,
+     "aerofoil: the skin fills the section, which is 36.02 thick at most, at 0.3 of the chord; "
+     "make it thinner, or \"solid\""},
+    {"aerofoil_spar_cap_zero", UTW_E_OUTLINE, -1, -1, -1,
+     "\"cap\" is [0, 2]; both must be greater than 0"},
+    {"aerofoil_spar_without_t", UTW_E_SYNTAX, -1, -1, -1, "aerofoil, spar 1: \"t\" is missing"},
+    {"aerofoil_spars_out_of_order", UTW_E_OUTLINE, -1, -1, -1,
+     "aerofoil, spar 2: \"at\" is 0.2; list the spars from the nose to the tail"},
+    {"aerofoil_unknown_key", UTW_E_SYNTAX, -1, -1, -1,
+     "unknown key \"ribs\"; known here: naca, points, chord, skin, spars, nose, tail, edge, r"},
+    {"aerofoil_without_chord", UTW_E_SYNTAX, -1, -1, -1,
+     "aerofoil: \"chord\" is missing; give its length"},
+    {"aerofoil_without_points", UTW_E_SYNTAX, -1, -1, -1,
+     "aerofoil: \"naca\" or \"points\" is missing; give one of them"},
+    {"aerofoil_without_skin", UTW_E_SYNTAX, -1, -1, -1,
+     "aerofoil: \"skin\" is missing; give its thickness"},
     {"arc_in_line", UTW_E_OUTLINE, 0, 0, 2,
      "part 1, outline, vertex 3: there is no arc from (40, 0) through (40, 12) to (40, 30): the "
      "three points lie in line or coincide; move the point of \"arc\", or leave it out for a "
@@ -280,7 +319,7 @@ static const struct {
     {"shape_material_in_part", UTW_E_SYNTAX, 0, -1, -1,
      "part 1: unknown key \"material\"; known here: rectangle, round, ellipse, polygon, trapezium, "
      "tube, box, slit-tube, arc-strip, angle, channel, I, tee, zed, cruciform, bulb, hat, "
-     "formed-channel, formed-zed, keyed-shaft, splined-shaft, at, turn, mirror"},
+     "formed-channel, formed-zed, keyed-shaft, splined-shaft, aerofoil, at, turn, mirror"},
     {"shape_mirror_a_number", UTW_E_SYNTAX, -1, -1, -1,
      "\"mirror\" must be true or false, not a number"},
     {"shape_name_is_a_number", UTW_E_SYNTAX, -1, -1, -1,

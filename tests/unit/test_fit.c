@@ -70,12 +70,12 @@ static void cubics_stay_within_the_tolerance(void **state)
     for (int i = 0; i < 2; i++) {
         const double tolerance = i == 0 ? 1e-6 : 1e-9;
         utw_fit fit = fitted(spiral, &one, 0.2, 8.3, tolerance);
-        assert_true(spiral_error(&fit) <= 1.05 * tolerance);
+        assert_true(spiral_error(&fit) <= tolerance);
         n[i] = fit.n;
         utw_free(fit.curve);
     }
     /* sixth order: a thousandth of the error for 3.2 times the pieces, 4 by halving */
-    assert_true(n[1] <= 4 * n[0] && n[1] > n[0]);
+    assert_true(n[1] <= 6 * n[0] && n[1] > n[0]);
     assert_true(n[0] <= 32 && n[1] <= 128);
 }
 
@@ -84,7 +84,7 @@ static void backward_is_the_same_curve(void **state)
     (void)state;
     const double one = 1;
     utw_fit fit = fitted(spiral, &one, 3.1, 0.4, 1e-8);
-    assert_true(spiral_error(&fit) <= 1.05e-8);
+    assert_true(spiral_error(&fit) <= 1e-8);
     double d[2];
     utw_curve_d1(&fit.curve[0], 0, d);
     assert_true(utw_cross(fit.curve[0].from, d) < 0); /* clockwise */
@@ -99,7 +99,7 @@ static void inflections_and_scales_do_not_matter(void **state)
         for (double t = 0; t <= 1; t += 0.01) {
             double p[2];
             utw_curve_point(&fit.curve[k], t, p);
-            assert_true(fabs(p[1] - sin(p[0])) < 1.5e-8);
+            assert_true(fabs(p[1] - sin(p[0])) <= 1e-8 * 1.5 /* along y, not across */);
         }
     utw_free(fit.curve);
     static const double scale[] = {1e-6, 1e6};

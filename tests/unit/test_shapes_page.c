@@ -14,10 +14,9 @@ static void expect(const char *page, const char *text)
     assert_non_null(strstr(page, text));
 }
 
-static void the_page_follows_the_table(void **state)
+/* The page, ended by a NUL; free with free(). */
+static char *read_page(void)
 {
-    (void)state;
-    static const char *const unit[] = {"length", "degrees", "per cent", "whole number"};
     utw_error err;
     char *text = NULL;
     size_t n = 0;
@@ -27,6 +26,14 @@ static void the_page_follows_the_table(void **state)
     memcpy(page, text, n);
     page[n] = '\0';
     utw_free(text);
+    return page;
+}
+
+static void the_page_follows_the_table(void **state)
+{
+    (void)state;
+    static const char *const unit[] = {"length", "degrees", "per cent", "whole number"};
+    char *page = read_page();
     for (int i = 0; i < utw_shape_count(); i++) {
         const utw_shape *shape = utw_shape_at(i);
         char line[400], otherwise[60];
@@ -50,8 +57,26 @@ static void the_page_follows_the_table(void **state)
     free(page);
 }
 
+static void its_examples_are_read(void **state)
+{
+    (void)state;
+    char *page = read_page();
+    int count = 0;
+    for (char *at = page; (at = strstr(at, "```json\n")) != NULL; count++) {
+        at += 8;
+        char *end = strstr(at, "\n```");
+        assert_non_null(end);
+        *end = '\0';
+        utw_outline_free(utw_outline_of(at));
+        at = end + 4;
+    }
+    free(page);
+    assert_true(count >= 2);
+}
+
 int main(void)
 {
-    const struct CMUnitTest tests[] = {balanced_test(the_page_follows_the_table)};
+    const struct CMUnitTest tests[] = {balanced_test(the_page_follows_the_table),
+                                       balanced_test(its_examples_are_read)};
     return cmocka_run_group_tests(tests, NULL, NULL);
 }
