@@ -166,6 +166,21 @@ static int find_kinks(const builder *b, double u0, double u1,
     return n;
 }
 
+/* Append the mirror image in y = 0 of the first n curves, run backward. */
+static utw_status mirror(builder *b, size_t n)
+{
+    for (size_t i = n; i-- > 0;) {
+        utw_curve c = utw_curve_reversed(&b->fit.curve[i]); /* lines and cubics only */
+        c.from[1] = -c.from[1];
+        c.to[1] = -c.to[1];
+        c.c1[1] = -c.c1[1];
+        c.c2[1] = -c.c2[1];
+        const utw_status st = utw_fit_append(&b->fit, c, b->err);
+        if (st != UTW_OK) return st;
+    }
+    return UTW_OK;
+}
+
 /* The inner side does not turn back on itself between u0 < u1, as it would where the contour has a
  * lesser radius than the skin's thickness; seen at every eighth of a piece of the contour. */
 static utw_status check_fold(const builder *b, double extra, double u0, double u1)
@@ -250,6 +265,7 @@ static utw_status zone_end(const builder *b, const zone *z, int end, int side, d
     if (!z->natural[end]) return inner_at(b, z->extra, z->x[end], side, u, p);
     *u = c->u[side];
     memcpy(p, c->p, sizeof c->p);
+    if (b->skin.symmetric) p[1] = 0;
     return UTW_OK;
 }
 
@@ -311,6 +327,19 @@ done:
     return st;
 }
 
+/* One side of a zone, joined by a face to what is there: above from tail to nose, below back. */
+static utw_status make_side(builder *b, const zone *z, int side)
+{
+    utw_status st = UTW_E_INTERNAL;
+    double u[2], p[2][2];
+    for (int i = 0; i < 2; i++) UTW_TRY(zone_end(b, z, side == 0 ? i : 1 - i, side, &u[i], p[i]));
+    UTW_TRY(face_to(b, p[0]));
+    UTW_TRY(follow(b, z->extra, u[0], u[1], p[0], p[1]));
+    st = UTW_OK;
+done:
+    return st;
+}
+
 /* Upper side from tail to nose, front face, lower side from nose to tail, rear face. */
 static utw_status make_hole(builder *b, const bay *y, utw_part *part)
 {
@@ -318,14 +347,14 @@ static utw_status make_hole(builder *b, const bay *y, utw_part *part)
     zone z[3];
     const int n = make_zones(y, z);
     for (int k = 0; k < n; k++) UTW_TRY(check_zone(b, &z[k]));
-    for (int k = 0; k < 2 * n; k++) {
-        const int side = k < n ? 0 : 1;
-        const zone *here = &z[side == 0 ? k : 2 * n - 1 - k];
-        double u[2], p[2][2];
-        for (int i = 0; i < 2; i++)
-            UTW_TRY(zone_end(b, here, side == 0 ? i : 1 - i, side, &u[i], p[i]));
-        UTW_TRY(face_to(b, p[0]));
-        UTW_TRY(follow(b, here->extra, u[0], u[1], p[0], p[1]));
+    for (int k = 0; k < n; k++) UTW_TRY(make_side(b, &z[k], 0));
+    if (b->skin.symmetric) {
+        const double *last = b->fit.curve[b->fit.n - 1].to;
+        const size_t upper = b->fit.n;
+        UTW_TRY(face_to(b, (double[2]){last[0], -last[1]}));
+        UTW_TRY(mirror(b, upper));
+    } else {
+        for (int k = n - 1; k >= 0; k--) UTW_TRY(make_side(b, &z[k], 1));
     }
     UTW_TRY(face_to(b, b->fit.curve[0].from));
     if (b->foil->r > 0) UTW_TRY(utw_aerofoil_round(&b->fit, b->foil->r, b->err));
@@ -341,8 +370,17 @@ static utw_status make_outline(builder *b, utw_part *part)
     const utw_aerofoil_skin *skin = &b->skin;
     const double *from = skin->piece[0].from, *to = skin->piece[skin->n - 1].to;
     utw_error *err = b->err;
-    UTW_TRY(utw_fit_cubics(utw_aerofoil_outer, skin, 0, skin->n, from, to, FOLLOW * b->foil->chord,
-                           &b->fit, err));
+    const double tolerance = FOLLOW * b->foil->chord;
+    double nose[2], d1[2], d2[2];
+    utw_aerofoil_outer(skin, skin->nose, nose, d1, d2);
+    if (skin->symmetric) nose[1] = 0;
+    UTW_TRY(utw_fit_cubics(utw_aerofoil_outer, skin, 0, skin->nose, from, nose, tolerance, &b->fit,
+                           err));
+    if (skin->symmetric)
+        UTW_TRY(mirror(b, b->fit.n));
+    else
+        UTW_TRY(utw_fit_cubics(utw_aerofoil_outer, skin, skin->nose, skin->n, nose, to, tolerance,
+                               &b->fit, err));
     if (b->fit.n > (size_t)skin->n) { /* a rough list of points: its own spline is shorter */
         b->fit.n = 0;
         for (int k = 0; k < skin->n; k++) UTW_TRY(utw_fit_append(&b->fit, skin->piece[k], err));

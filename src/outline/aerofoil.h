@@ -64,8 +64,8 @@ utw_status utw_aerofoil_points(const char *text, size_t n_text, double (**xy)[2]
  * inner side of the skin its true offset, square to it by the skin's thickness there; both are
  * followed by fitted cubics to 2e-7 of the chord. Where the two inner sides meet, toward the
  * trailing edge or in a nose whose radius is less than the skin's thickness, the cavity ends in
- * their crossing. With r > 0 the inner corners are rounded (aerofoil_round.h). UTW_E_OUTLINE,
- * UTW_E_NOMEM. */
+ * their crossing. Points that are symmetric about y = 0 give a drawing that is. With r > 0 the
+ * inner corners are rounded (aerofoil_round.h). UTW_E_OUTLINE, UTW_E_NOMEM. */
 utw_status utw_aerofoil_part(const utw_aerofoil *foil, utw_part *part, utw_error *err);
 
 #endif

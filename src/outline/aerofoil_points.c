@@ -16,10 +16,13 @@ enum {
     SIDE = 200
 }; /* intervals a side; the spline through them is within 1e-8 of the formula (tested) */
 
+static const double SHARP = -0.1036; /* the last coefficient that closes the edge */
+
 /* Half the thickness at x = s^2. Report 460: y_t = t/0.20 (0.2969 sqrt x - 0.1260 x - 0.3516 x^2 +
  * 0.2843 x^3 - 0.1015 x^4). */
 static double half_thickness(double t, double last, double x)
 {
+    if (x == 1 && last == SHARP) return 0; /* not what rounding leaves */
     return 5 * t * (0.2969 * sqrt(x) + x * (-0.1260 + x * (-0.3516 + x * (0.2843 + x * last))));
 }
 
@@ -68,7 +71,7 @@ utw_status utw_aerofoil_naca(const char *designation, int sharp, double (**xy)[2
             designation);
     double(*made)[2] = utw_alloc(2 * SIDE + 1, sizeof *made);
     if (made == NULL) return utw_fail(err, UTW_E_NOMEM, "out of memory (%s)", __func__);
-    const double last = sharp ? -0.1036 : -0.1015;
+    const double last = sharp ? SHARP : -0.1015;
     for (int i = 0; i <= 2 * SIDE; i++) {
         /* sqrt x evenly spaced at the nose, where the contour is smooth in it, and closer at the
          * tail than x = s^2 */

@@ -203,6 +203,11 @@ utw_status utw_aerofoil_skin_init(utw_aerofoil_skin *skin, const utw_aerofoil *f
     UTW_TRY_ALLOC(skin->piece = utw_alloc((size_t)skin->n, sizeof *skin->piece));
     for (int i = 0; i < foil->n; i++)
         for (int k = 0; k < 2; k++) xy[i][k] = foil->chord * foil->xy[i][k];
+    skin->symmetric = 1;
+    for (int i = 0; i < foil->n; i++) {
+        const double *p = foil->xy[i], *q = foil->xy[foil->n - 1 - i];
+        if (p[0] != q[0] || p[1] != -q[1]) skin->symmetric = 0;
+    }
     UTW_TRY(utw_spline_natural(foil->n, (const double(*)[2])xy, skin->piece, err));
     find_nose(skin);
     st = UTW_OK;

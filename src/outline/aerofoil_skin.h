@@ -13,6 +13,9 @@ typedef struct utw_aerofoil_skin {
     const utw_aerofoil *foil; /* borrowed */
     utw_curve *piece;         /* [n], owned: the natural cubic spline */
     int n;
+    int symmetric;     /* 1: the lower side mirrors the upper one in y = 0, to the last bit of the
+                        * points
+                        */
     double nose;       /* u of the least x of the contour */
     double inner_nose; /* u of the least x of the inner side (extra = 0), when it is round there */
     int round_nose;    /* 1: the inner side follows the nose; 0: its two halves cross */
