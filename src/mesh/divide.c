@@ -20,6 +20,7 @@
 #define GROWTH     1.7
 #define DEEPEST    24 /* halvings of one curve */
 #define RE_ENTRANT (185 * UTW_PI / 180)
+#define CONVEX     (110 * UTW_PI / 180)
 
 /* A piece of a net edge with the size wanted there. */
 typedef struct span {
@@ -114,12 +115,12 @@ static utw_status grade_ends(divider *d, utw_error *err)
     return st;
 }
 
-/* What happens at a re-entrant corner has the size of the shorter edge at it: there a side is at
- * most as long as the edge. */
-static utw_status note_re_entrant(divider *d, utw_error *err)
+/* What happens at a corner has the size of the shorter edge at it: there a side is at most as long
+ * as the edge. Corners that are nearly straight are left alone, they do little. */
+static utw_status note_corners(divider *d, double least, double most, utw_error *err)
 {
     int *node = NULL, n = 0;
-    const utw_status st = utw_net_sharp_corners(d->net, RE_ENTRANT, &node, &n, err);
+    const utw_status st = utw_net_corners(d->net, least, most, &node, &n, err);
     if (st != UTW_OK) return st;
     for (int k = 0; k < n; k++) d->node_h[node[k]] = 0; /* a mark, for the time being */
     for (size_t i = 0; i < d->list.n; i++) {
@@ -220,7 +221,8 @@ utw_status utw_division_create(const utw_net *net, double scale, utw_division **
     /* a curve that sees no wall takes its own length */
     for (size_t i = 0; i < d.list.n; i++)
         d.list.s[i].h = fmin(d.list.s[i].h, 1e3 * d.list.s[i].length);
-    UTW_TRY(note_re_entrant(&d, err));
+    UTW_TRY(note_corners(&d, RE_ENTRANT, UTW_INFINITY, err));
+    UTW_TRY(note_corners(&d, 0, CONVEX, err));
     UTW_TRY(grade_ends(&d, err));
     for (int pass = 0; pass < 20 && smooth_once(&d); pass++) continue;
     UTW_TRY_ALLOC(out = utw_alloc(1, sizeof *out));

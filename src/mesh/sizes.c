@@ -2,6 +2,8 @@
  * Least of size plus growth times distance, by branch and bound over a tree of boxes. */
 #include "mesh/sizes.h"
 
+#include <string.h>
+
 #include "base/memory.h"
 #include "base/status.h"
 #include "base/vec2.h"
@@ -13,9 +15,7 @@ typedef struct range {
 
 struct utw_sizes {
     int n;
-    double greatest;
-    double (*xy)[2],
-        *size; /* [n], in the order given: neighbours on the boundary are neighbours in the plane */
+    double (*xy)[2], *size; /* [n] as given: neighbours on the boundary are near in the plane */
     range *tree; /* [2 n - 1], preorder: a range of k points has 2k - 1 nodes */
 };
 
@@ -47,14 +47,10 @@ utw_status utw_sizes_create(int n, const double (*xy)[2], const double *size, ut
     UTW_TRY_ALLOC(s->xy = utw_alloc((size_t)n, sizeof *s->xy));
     UTW_TRY_ALLOC(s->size = utw_alloc((size_t)n, sizeof *s->size));
     UTW_TRY_ALLOC(s->tree = utw_alloc(2 * (size_t)n, sizeof *s->tree));
-    for (int i = 0; i < n; i++) s->greatest = fmax(s->greatest, size[i]);
-    for (int i = 0; i < n; i++) {
-        if (size[i] >= 0.5 * s->greatest) continue;
-        s->xy[s->n][0] = xy[i][0];
-        s->xy[s->n][1] = xy[i][1];
-        s->size[s->n++] = size[i];
-    }
-    if (s->n > 0) build(s, 0, 0, s->n);
+    memcpy(s->xy, xy, (size_t)n * sizeof *xy);
+    memcpy(s->size, size, (size_t)n * sizeof *size);
+    s->n = n;
+    build(s, 0, 0, n);
     *sizes = s;
     s = NULL;
     st = UTW_OK;
@@ -96,7 +92,7 @@ static void descend(const utw_sizes *s, int node, int i, int j, const double p[2
 
 double utw_sizes_at(const utw_sizes *sizes, const double xy[2])
 {
-    double best = sizes->greatest;
-    if (sizes->n > 0) descend(sizes, 0, 0, sizes->n, xy, &best);
+    double best = UTW_INFINITY;
+    descend(sizes, 0, 0, sizes->n, xy, &best);
     return best;
 }

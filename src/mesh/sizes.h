@@ -13,13 +13,13 @@ typedef struct utw_sizes utw_sizes;
  * times as many unknowns for 1e-6), with less elements are only added. */
 #define UTW_SIZE_GROWTH 0.7
 
-/** Copy the points that can matter: those with less than half of the greatest size. [in] xy[n][2],
- * size[n] [L], > 0. Returned owned: utw_sizes_free(). UTW_E_NOMEM. */
+/** Copy n >= 1 points. [in] xy[n][2], size[n] [L], > 0. Returned owned: utw_sizes_free().
+ * UTW_E_NOMEM. */
 utw_status utw_sizes_create(int n, const double (*xy)[2], const double *size, utw_sizes **sizes,
                             utw_error *err);
 void utw_sizes_free(utw_sizes *sizes);
 
-/** Least of size + growth * distance over the points; the greatest size when it is more [L]. */
+/** Least of size + growth * distance over the points [L]. */
 double utw_sizes_at(const utw_sizes *sizes, const double xy[2]);
 
 #endif

@@ -416,6 +416,8 @@ utw_status utw_mesh_triangulate(const utw_net *net, const utw_division *division
     gmshOptionSetNumber("General.Verbosity", 0, &ierr);
     /* Delaunay: the frontal one leaves fans of needles where sizes grow fast */
     gmshOptionSetNumber("Mesh.Algorithm", 5, &ierr);
+    gmshOptionSetNumber("Mesh.MeshSizeExtendFromBoundary", 0, &ierr);
+    gmshOptionSetNumber("Mesh.MeshSizeFromPoints", 0, &ierr);
     gmshOptionSetNumber("Mesh.MaxNumThreads2D", 1, &ierr);
     gmshOptionSetNumber("Mesh.MeshOnlyEmpty", 1, &ierr); /* the lines are meshed already */
     gmshOptionSetNumber("Mesh.Smoothing", 0, &ierr);

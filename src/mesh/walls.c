@@ -6,9 +6,9 @@
 #include "base/status.h"
 #include "base/vec2.h"
 
-/* A straight piece of a net edge, between two parameters. */
+/* A piece of a net edge between two parameters, and how far it strays from its chord. */
 typedef struct piece {
-    double a[2], b[2], t0, t1;
+    double a[2], b[2], t0, t1, bulge;
     int edge;
 } piece;
 
@@ -33,8 +33,8 @@ static void build(utw_walls *w, int node, int i, int j)
     if (j - i == 1) {
         const piece *p = &w->piece[i];
         for (int k = 0; k < 2; k++) {
-            b->lo[k] = fmin(p->a[k], p->b[k]);
-            b->hi[k] = fmax(p->a[k], p->b[k]);
+            b->lo[k] = fmin(p->a[k], p->b[k]) - p->bulge;
+            b->hi[k] = fmax(p->a[k], p->b[k]) + p->bulge;
         }
         return;
     }
@@ -52,6 +52,22 @@ static int pieces_of(const utw_curve *c)
     if (c->kind == UTW_LINE) return 1;
     const int n = (int)ceil(utw_curve_turning(c) / (UTW_PI / 18)); /* at most 10 degrees each */
     return c->kind == UTW_CUBIC && n < 8 ? 8 : n < 2 ? 2 : n;
+}
+
+/* Greatest distance of a piece from its chord: seen at three places, half as much again to be safe.
+ */
+static double bulge_of(const utw_curve *c, const piece *p)
+{
+    double most = 0;
+    if (c->kind == UTW_LINE) return 0;
+    for (int k = 1; k <= 3; k++) {
+        double x[2];
+        utw_curve_point(c, p->t0 + 0.25 * k * (p->t1 - p->t0), x);
+        const double u[2] = {x[0] - p->a[0], x[1] - p->a[1]},
+                     v[2] = {p->b[0] - p->a[0], p->b[1] - p->a[1]};
+        most = fmax(most, fabs(utw_cross(u, v)) / fmax(utw_norm(v), 1e-300));
+    }
+    return 1.5 * most;
 }
 
 utw_status utw_walls_create(const utw_net *net, utw_walls **walls, utw_error *err)
@@ -74,6 +90,7 @@ utw_status utw_walls_create(const utw_net *net, utw_walls **walls, utw_error *er
             p->t1 = (double)(i + 1) / n;
             utw_curve_point(c, p->t0, p->a);
             utw_curve_point(c, p->t1, p->b);
+            p->bulge = bulge_of(c, p);
         }
     }
     if (w->n > 0) build(w, 0, 0, w->n);
@@ -134,19 +151,40 @@ static double shared_corner(const utw_walls *w, const ray *r, int other)
     return d;
 }
 
-static void meet(const utw_walls *w, const piece *p, ray *r)
+/* Where the ray passes through the chord of a piece [L]; UTW_INFINITY when it does not. On a thin
+ * wall the chord may lie behind the opposite curve: there the curve itself is met, by Newton's
+ * method from the chord. */
+static double passes(const utw_walls *w, const piece *p, const ray *r)
 {
     const double side[2] = {p->b[0] - p->a[0], p->b[1] - p->a[1]};
     const double to[2] = {p->a[0] - r->from[0], p->a[1] - r->from[1]};
     const double across = utw_cross(r->dir, side);
-    if (across == 0) return;
-    const double length = utw_cross(to, side) / across, along = utw_cross(to, r->dir) / across;
-    if (!(length > 0) || along < 0 || along > 1) return;
+    if (across == 0) return UTW_INFINITY;
+    double length = utw_cross(to, side) / across, along = utw_cross(to, r->dir) / across;
+    if (p->bulge == 0) return length > 0 && along >= 0 && along <= 1 ? length : UTW_INFINITY;
+    const utw_curve *c = &w->net->edge[p->edge].curve;
+    const double span = p->t1 - p->t0;
+    for (int i = 0; i < 4; i++) {
+        double x[2], d[2];
+        if (!(along > -0.5 && along < 1.5)) return UTW_INFINITY;
+        utw_curve_point(c, p->t0 + along * span, x);
+        utw_curve_d1(c, p->t0 + along * span, d);
+        const double off[2] = {x[0] - r->from[0], x[1] - r->from[1]};
+        const double slope = span * utw_cross(r->dir, d);
+        if (slope == 0) return UTW_INFINITY;
+        length = utw_dot(off, r->dir);
+        along -= utw_cross(r->dir, off) / slope;
+    }
+    return length > 0 && along >= -1e-6 && along <= 1 + 1e-6 ? length : UTW_INFINITY;
+}
+
+static void meet(const utw_walls *w, const piece *p, ray *r)
+{
     if (p->edge == r->edge) { /* the curve's own chords near the start are no opposite wall */
         const double reach = 1.5 * (p->t1 - p->t0);
         if (r->t > p->t0 - reach && r->t < p->t1 + reach) return;
     }
-    double seen = length;
+    double seen = passes(w, p, r);
     if (p->edge != r->edge) {
         const double corner = shared_corner(w, r, p->edge);
         if (corner < UTW_INFINITY) seen = fmax(seen, r->wedge * corner);

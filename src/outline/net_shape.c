@@ -49,8 +49,8 @@ static int is_outer(const utw_net *net, int ref)
     return e->left < 0 || e->right < 0;
 }
 
-utw_status utw_net_sharp_corners(const utw_net *net, double least_angle, int **node, int *n,
-                                 utw_error *err)
+utw_status utw_net_corners(const utw_net *net, double least, double most, int **node, int *n,
+                           utw_error *err)
 {
     utw_status st = UTW_E_INTERNAL;
     double *angle = NULL;
@@ -74,7 +74,7 @@ utw_status utw_net_sharp_corners(const utw_net *net, double least_angle, int **n
         }
     }
     for (int i = 0; i < net->n_node; i++)
-        if (outer[i] && angle[i] > least_angle) list[count++] = i;
+        if (outer[i] && angle[i] > least && angle[i] < most) list[count++] = i;
     *node = list;
     *n = count;
     list = NULL;
@@ -84,4 +84,10 @@ done:
     utw_free(outer);
     utw_free(list);
     return st;
+}
+
+utw_status utw_net_sharp_corners(const utw_net *net, double least_angle, int **node, int *n,
+                                 utw_error *err)
+{
+    return utw_net_corners(net, least_angle, UTW_INFINITY, node, n, err);
 }

@@ -39,16 +39,24 @@ static double relative_gap(const utw_measures *m)
     return gap / (high - 0.5 * gap);
 }
 
-/* The value each pair's gap is held against. The anticlastic pairs enter the shear flexibility with
- * the square of nu/(2(1+nu)) <= 1/6. */
+/* What an anticlastic pair adds to the shear flexibility is mu^2 (its energy less that of the
+ * torsion in it), mu = nu/(2(1+nu)) <= 1/6: 36 times the flexibility at nu = 0 and that difference
+ * are what its gap is held against. */
+static double anticlastic_scale(const utw_measures *m, int anti, double shear)
+{
+    const double torsion = m->stress[UTW_TORSION][UTW_TORSION], both = m->stress[anti][UTW_TORSION];
+    return 36 * shear + fabs(m->stress[anti][anti] - both * both / torsion);
+}
+
+/* The value each pair's gap is held against. */
 static void scales(const utw_measures *m, double scale[UTW_N_PAIR])
 {
     scale[UTW_TORSION] =
         m->stress[UTW_TORSION][UTW_TORSION] - 0.5 * m->gap[UTW_TORSION][UTW_TORSION];
     scale[UTW_SHEAR_X] = m->energy[UTW_SHEAR_X][UTW_SHEAR_X];
     scale[UTW_SHEAR_Y] = m->energy[UTW_SHEAR_Y][UTW_SHEAR_Y];
-    scale[UTW_ANTI_X] = 36 * scale[UTW_SHEAR_X];
-    scale[UTW_ANTI_Y] = 36 * scale[UTW_SHEAR_Y];
+    scale[UTW_ANTI_X] = anticlastic_scale(m, UTW_ANTI_X, scale[UTW_SHEAR_X]);
+    scale[UTW_ANTI_Y] = anticlastic_scale(m, UTW_ANTI_Y, scale[UTW_SHEAR_Y]);
 }
 
 typedef struct loop {

@@ -168,18 +168,18 @@ static double warping_constant(const moments *g, const utw_measures *m)
 
 /* The warping constant is no energy, so it has no bracket. The error of int omega^2 is 2 int grad
  * eta . grad (omega - omega_h) with -lap eta = omega; Galerkin's method lets eta_h be taken off, so
- * it is below the product of both relative errors in energy. That of eta is judged by those of
- * omega and z, whose loads are as smooth; four times the product is stated. */
-static utw_interval warping_estimate(const moments *g, const utw_measures *m)
+ * it is below the product of both relative errors in energy. That of eta is not known: the worst of
+ * those of omega and z stands for it, and as z may be a polynomial that is met exactly, and omega
+ * nearly one (on a strip), for that of omega too, its gap held against J or its energy, whichever
+ * is less. Four times the product is stated. */
+static utw_interval warping_estimate(const moments *g, const utw_measures *m, double J)
 {
     const double Iw = fmax(warping_constant(g, m), 0), squares = m->product[UTW_TORSION];
     const double floor = 1e-12 * squares + ROUNDING * ROUNDING;
-    double relative[3], worst = 0;
-    for (int i = UTW_TORSION; i <= UTW_SHEAR_Y; i++) {
-        relative[i] = m->energy[i][i] > 0 ? m->gap[i][i] / m->energy[i][i] : 0;
-        worst = fmax(worst, relative[i]);
-    }
-    const double half = 4 * sqrt(relative[UTW_TORSION] * worst) * squares + floor;
+    double worst = m->gap[UTW_TORSION][UTW_TORSION] / J;
+    for (int i = UTW_TORSION; i <= UTW_SHEAR_Y; i++)
+        if (m->energy[i][i] > 0) worst = fmax(worst, m->gap[i][i] / m->energy[i][i]);
+    const double half = 4 * worst * squares + floor;
     return (utw_interval){Iw, fmax(Iw - half, 0), Iw + half};
 }
 
@@ -230,7 +230,7 @@ void utw_constants_of_solution(const utw_area *area, double scale, const utw_sol
     shear_centre(&g, m, s);
     put(value, UTW_XS, UTW_BRACKET, s[0], scale, area->xc);
     put(value, UTW_YS, UTW_BRACKET, s[1], scale, area->yc);
-    put(value, UTW_IW, UTW_ESTIMATE, warping_estimate(&g, m), s2 * s2 * s2, 0);
+    put(value, UTW_IW, UTW_ESTIMATE, warping_estimate(&g, m, J.value), s2 * s2 * s2, 0);
     with_poisson(&g, m, J, s, nu, area, scale, value);
     monosymmetry(&g, s, beta);
     put(value, UTW_BETAX, UTW_BRACKET, beta[0], scale, 0);

@@ -22,30 +22,28 @@ static void least_over_all_points(void **state)
     (void)state;
     utw_error err;
     utw_sizes *sizes = NULL;
-    double xy[N][2], size[N], greatest = 0;
+    double xy[N][2], size[N];
     points(xy, size);
-    for (int i = 0; i < N; i++) greatest = fmax(greatest, size[i]);
     assert_ok(utw_sizes_create(N, (const double(*)[2])xy, size, &sizes, &err));
     for (double x = -5; x < 5; x += 0.37)
         for (double y = -4; y < 4; y += 0.29) {
-            double expected = greatest;
+            double expected = UTW_INFINITY;
             for (int i = 0; i < N; i++)
-                if (size[i] < greatest / 2)
-                    expected = fmin(expected,
-                                    size[i] + UTW_SIZE_GROWTH * hypot(x - xy[i][0], y - xy[i][1]));
+                expected = fmin(expected,
+                                size[i] + UTW_SIZE_GROWTH * hypot(x - xy[i][0], y - xy[i][1]));
             assert_close(utw_sizes_at(sizes, (double[2]){x, y}), expected, 1e-15);
         }
     utw_sizes_free(sizes);
 }
 
-static void even_sizes_leave_the_mesher_alone(void **state)
+static void one_point_is_enough(void **state)
 {
     (void)state;
     utw_error err;
     utw_sizes *sizes = NULL;
-    const double xy[3][2] = {{0, 0}, {1, 0}, {0, 1}}, size[3] = {1.1, 0.9, 1.4};
-    assert_ok(utw_sizes_create(3, xy, size, &sizes, &err));
-    assert_close(utw_sizes_at(sizes, (double[2]){0.1, 0.1}), 1.4, 0);
+    const double xy[1][2] = {{1.5, -2}}, size[1] = {0.37};
+    assert_ok(utw_sizes_create(1, xy, size, &sizes, &err));
+    assert_close(utw_sizes_at(sizes, (double[2]){4.5, 2}), 0.37 + 5 * UTW_SIZE_GROWTH, 1e-15);
     utw_sizes_free(sizes);
     utw_sizes_free(NULL);
 }
@@ -54,7 +52,7 @@ int main(void)
 {
     const struct CMUnitTest tests[] = {
         balanced_test(least_over_all_points),
-        balanced_test(even_sizes_leave_the_mesher_alone),
+        balanced_test(one_point_is_enough),
     };
     return cmocka_run_group_tests(tests, NULL, NULL);
 }
