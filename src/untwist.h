@@ -586,6 +586,11 @@ typedef struct utw_idealisation utw_idealisation;
 UTW_API UTW_CHECK utw_status utw_idealise(const utw_outline *outline, utw_idealisation **idealisation,
                                           utw_error *err);
 
+/** The same with a midline of one's own in place of one found. [in] midline, copied. UTW_E_ARGUMENT, UTW_E_NO_THIN_WALL,
+ *  UTW_E_NOMEM, and UTW_E_OUTLINE as utw_thin_solve(). */
+UTW_API UTW_CHECK utw_status utw_idealise_as(const utw_outline *outline, const utw_midline *midline,
+                                             utw_idealisation **idealisation, utw_error *err);
+
 /** Free it; NULL is allowed. */
 UTW_API void utw_idealisation_free(utw_idealisation *idealisation);
 
@@ -606,6 +611,57 @@ UTW_API const utw_idealisation_info *utw_idealisation_get(const utw_idealisation
  *  or the sentence says so. Returned borrowed. */
 UTW_API const char *utw_idealisation_doubt(const utw_idealisation *idealisation);
 
+/* ---- the comparison of both ----------------------------------------------------------------------- */
+
+/** What a difference is in parts of. */
+typedef enum utw_difference_base {
+    UTW_OF_SOLID = 0, /* the solid value itself */
+    UTW_OF_WIDTH,     /* xc, xs: the width of the section */
+    UTW_OF_DEPTH,     /* yc, ys: its depth */
+    UTW_OF_MEAN       /* Ixy: sqrt(Ixx Iyy) */
+} utw_difference_base;
+
+/** A constant by both theories, in the units of utw_solution_constant(). */
+typedef struct utw_compared {
+    utw_constant which;
+    const char *absent; /* NULL; else a sentence why there is nothing to compare, and the rest is not set. Borrowed */
+    utw_quantity solid;
+    double thin;
+    utw_difference_base base;
+    double difference; /* (thin - solid) over its base [1] */
+    int within;        /* 1: at most the limit, for every solid value between its bounds */
+} utw_compared;
+
+/** A solid solution and a thin-walled idealisation of the same section, side by side. */
+typedef struct utw_comparison utw_comparison;
+
+/** Compare. [in] solution, idealisation, borrowed; they must outlive the comparison. limit: the greatest difference
+ *  at which the thin-walled value may stand for the solid one, such as 0.05; 1e-6 .. 1. [out] *comparison, returned
+ *  owned: utw_comparison_free(). Compared are A, xc, yc, Ixx, Iyy, Ixy, I1, I2, J, Wt, xs, ys, Iw, Asx, Asy; where the
+ *  thin-walled Iw is 0, Iw_secondary stands for it. UTW_E_ARGUMENT, UTW_E_NOMEM. */
+UTW_API UTW_CHECK utw_status utw_compare(const utw_solution *solution, const utw_idealisation *idealisation,
+                                         double limit, utw_comparison **comparison, utw_error *err);
+
+/** Free it; NULL is allowed. */
+UTW_API void utw_comparison_free(utw_comparison *comparison);
+
+/** How many constants are compared, and the k-th one; NULL when k is out of range. Returned borrowed. */
+UTW_API int utw_comparison_count(const utw_comparison *comparison);
+UTW_API const utw_compared *utw_comparison_get(const utw_comparison *comparison, int k);
+
+/** The limit. */
+UTW_API double utw_comparison_limit(const utw_comparison *comparison);
+
+/** For which constants the idealisation may be used and for which not, in a sentence or two. Returned borrowed. */
+UTW_API const char *utw_comparison_verdict(const utw_comparison *comparison);
+
+/** The reasons found, a sentence each; NULL when k is out of range. Returned borrowed. */
+UTW_API int utw_comparison_reason_count(const utw_comparison *comparison);
+UTW_API const char *utw_comparison_reason(const utw_comparison *comparison, int k);
+
+/** Its idealisation. Returned borrowed. */
+UTW_API const utw_idealisation *utw_comparison_idealisation(const utw_comparison *comparison);
+
 /* ---- reports ------------------------------------------------------------------------------------- */
 
 /** What a report tells. Start from UTW_REPORT_INIT; what stays NULL is left out. */
@@ -613,9 +669,10 @@ typedef struct utw_report {
     int version;                  /* 1 */
     const utw_solution *solution; /* borrowed; required */
     const utw_cases *cases;       /* borrowed: load cases and probes of this solution */
+    const utw_comparison *comparison; /* borrowed: of this solution; in the JSON and in utw_report_comparison() */
 } utw_report;
 
-#define UTW_REPORT_INIT {1, NULL, NULL}
+#define UTW_REPORT_INIT {1, NULL, NULL, NULL}
 
 /** A table for people: the constants with their bounds, trust and units, what is left out and why, what
  *  the solution took. Plain text of at most 100 columns at usual tolerances. Angles are in degrees.
@@ -631,6 +688,16 @@ UTW_API UTW_CHECK utw_status utw_report_json(const utw_report *report, char **te
  *  columns case, point, quantity, value, error, x, y, unit. [out] *text, returned owned: utw_report_free().
  *  UTW_E_ARGUMENT (report->cases is needed), UTW_E_NOMEM. */
 UTW_API UTW_CHECK utw_status utw_report_csv(const utw_report *report, char **text, utw_error *err);
+
+/** The comparison for people: the verdict, the table of both values, the reasons, the walls. Plain text of at most 100
+ *  columns at usual tolerances. [out] *text, returned owned: utw_report_free(). UTW_E_ARGUMENT (report->comparison is
+ *  needed), UTW_E_NOMEM. */
+UTW_API UTW_CHECK utw_status utw_report_comparison(const utw_report *report, char **text, utw_error *err);
+
+/** A midline as a section file (docs/section-file.md), to be edited and read again. [in] midline, name, units, borrowed.
+ *  [out] *text, returned owned: utw_report_free(). UTW_E_ARGUMENT, UTW_E_NOMEM. */
+UTW_API UTW_CHECK utw_status utw_midline_file(const utw_midline *midline, const char *name, const char *units,
+                                              char **text, utw_error *err);
 
 /** Free a report; NULL is allowed. */
 UTW_API void utw_report_free(char *text);

@@ -74,7 +74,8 @@ void utw_text_wrap(utw_text *text, int indent, int width, const char *words)
     for (;;) {
         const size_t blanks = strspn(words, " ");
         words += blanks;
-        const size_t n = strcspn(words, " \n");
+        size_t n = strcspn(words, " \n");
+        while (words[n] == ' ' && words[n + 1] == '%') n += 1 + strcspn(words + n + 1, " \n");
         const int column = utw_text_column(text);
         if (n > 0 && !fresh && column + 1 + characters(words, n) > width) {
             utw_text_add(text, "\n");

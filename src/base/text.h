@@ -30,7 +30,7 @@ void utw_text_pad(utw_text *text, int column);
 
 /** Add `words` broken at spaces so that no line is longer than `width` characters (a longer word
  * stands alone); lines after the first begin with `indent` spaces. Ends with a line break. Line
- * breaks in `words` are kept. */
+ * breaks in `words` are kept; a per cent sign stays with its number. */
 void utw_text_wrap(utw_text *text, int indent, int width, const char *words);
 
 /** Hand over what was written. [out] *content, returned owned: utw_free(); never NULL on success.

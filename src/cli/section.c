@@ -19,20 +19,35 @@ static utw_status read_outline(const cli_call *call, utw_outline **outline, utw_
     return st;
 }
 
-int cli_solve_section(const cli_call *call, cli_section *section)
+int cli_read_section(const cli_call *call, cli_section *section)
+{
+    utw_error err;
+    *section = (cli_section){NULL, NULL};
+    return read_outline(call, &section->outline, &err) == UTW_OK ? CLI_DONE : cli_fail(&err);
+}
+
+void cli_solving_options(const cli_call *call, utw_options *options)
+{
+    options->tolerance = cli_number(call, "tol", options->tolerance);
+    options->fixed_order = (int)cli_number(call, "order", options->fixed_order);
+}
+
+int cli_solve_read_section(const cli_call *call, cli_section *section)
 {
     utw_error err;
     utw_options options = UTW_OPTIONS_INIT;
     cli_progress progress;
-    *section = (cli_section){NULL, NULL};
-    options.tolerance = cli_number(call, "tol", options.tolerance);
-    options.fixed_order = (int)cli_number(call, "order", options.fixed_order);
-    utw_status st = read_outline(call, &section->outline, &err);
-    if (st != UTW_OK) return cli_fail(&err);
+    cli_solving_options(call, &options);
     cli_progress_begin(&progress, &options);
-    st = utw_solve(section->outline, &options, &section->solution, &err);
+    const utw_status st = utw_solve(section->outline, &options, &section->solution, &err);
     cli_progress_end(&progress);
     return st == UTW_OK ? CLI_DONE : cli_fail(&err);
+}
+
+int cli_solve_section(const cli_call *call, cli_section *section)
+{
+    const int status = cli_read_section(call, section);
+    return status == CLI_DONE ? cli_solve_read_section(call, section) : status;
 }
 
 void cli_clear_section(cli_section *section)

@@ -28,6 +28,13 @@ typedef struct cli_section {
  * to be cleared whatever is returned. Returns CLI_DONE, or the exit status after a message. */
 int cli_solve_section(const cli_call *call, cli_section *section);
 
+/** The same in two steps: read it, and solve what was read. */
+int cli_read_section(const cli_call *call, cli_section *section);
+int cli_solve_read_section(const cli_call *call, cli_section *section);
+
+/** Set the options of a solution that were given. */
+void cli_solving_options(const cli_call *call, utw_options *options);
+
 void cli_clear_section(cli_section *section);
 
 /** CLI_DONE when the tolerance of the solution was reached, else CLI_NOT_REACHED after a message.

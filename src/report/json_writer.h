@@ -41,5 +41,6 @@ void utw_json_add_point(utw_json_writer *writer, cJSON *to, const char *key, con
 
 /** Members of the document, one function a kind of result; [in,out] root. */
 void utw_json_add_cases(utw_json_writer *writer, cJSON *root);
+void utw_json_add_comparison(utw_json_writer *writer, cJSON *root);
 
 #endif

@@ -125,10 +125,9 @@ static utw_status solve(utw_idealisation *ideal, utw_error *err)
 
 /* The midline a section was drawn by. A corner takes half the thickest other wall from each wall
  * that ends in it. */
-static utw_status take(utw_idealisation *ideal, const utw_outline *outline, utw_error *err)
+static utw_status take(utw_idealisation *ideal, const utw_midline *m, int holes, utw_error *err)
 {
     utw_status st = UTW_E_INTERNAL;
-    const utw_midline *m = utw_outline_midline(outline);
     utw_midline *copy = &ideal->midline;
     UTW_TRY_ALLOC(copy->nodes = utw_alloc((size_t)m->n_nodes, sizeof *copy->nodes));
     UTW_TRY_ALLOC(copy->walls = utw_alloc((size_t)m->n_walls, sizeof *copy->walls));
@@ -139,7 +138,7 @@ static utw_status take(utw_idealisation *ideal, const utw_outline *outline, utw_
     copy->n_walls = m->n_walls;
     UTW_TRY(utw_rate_walls(ideal, NULL, err));
     ideal->info.given = 1;
-    ideal->info.holes = outline->part[0].n_loop - 1;
+    ideal->info.holes = holes;
     for (int i = 0; i < m->n_walls; i++) {
         ideal->faced[i] = ideal->wall[i].length;
         for (int e = 0; e < 2; e++) {
@@ -188,39 +187,50 @@ static void check_against_outline(utw_idealisation *ideal, const utw_area *area)
     utw_idealisation_info *info = &ideal->info;
     info->area_error = info->length * info->thickness / area->A - 1;
     info->length_error = (info->length + half_ends(&ideal->midline)) / (0.5 * area->perimeter) - 1;
-    if (info->given) return;
     if (info->cells != info->holes)
         snprintf(ideal->doubt, sizeof ideal->doubt,
-                 "The midline found has %d %s and the section %d %s: do not trust it.", info->cells,
+                 "The midline has %d %s and the section %d %s: do not trust it.", info->cells,
                  info->cells == 1 ? "cell" : "cells", info->holes,
                  info->holes == 1 ? "hole" : "holes");
     else if (fabs(info->area_error) > AREA)
         snprintf(ideal->doubt, sizeof ideal->doubt,
-                 "The midline found does not represent this section well: its area is %.3g %% %s "
+                 "The midline does not represent this section well: its area is %.3g %% %s "
                  "than the section's.",
                  100 * fabs(info->area_error), info->area_error > 0 ? "greater" : "smaller");
     else if (fabs(info->length_error) > LENGTH)
         snprintf(ideal->doubt, sizeof ideal->doubt,
-                 "The midline found does not represent this section well: its walls are %.3g %% %s "
+                 "The midline does not represent this section well: its walls are %.3g %% %s "
                  "than half the boundary is long.",
                  100 * fabs(info->length_error), info->length_error > 0 ? "longer" : "shorter");
 }
 
-utw_status utw_idealise_with(const utw_outline *outline, double density,
-                             utw_idealisation **idealisation, utw_error *err)
+/* Holes of all parts together: a part may fill the hole of another. */
+static utw_status count_holes(const utw_outline *outline, int *holes, utw_error *err)
+{
+    utw_border *border = NULL;
+    *holes = outline->part[0].n_loop - 1;
+    if (outline->n_part == 1) return UTW_OK;
+    const utw_status st = utw_border_create(outline, 1, &border, err);
+    if (st == UTW_OK) *holes = border->n_loop - 1;
+    utw_border_free(border);
+    return st;
+}
+
+static utw_status idealise(const utw_outline *outline, const utw_midline *midline, double density,
+                           utw_idealisation **idealisation, utw_error *err)
 {
     utw_status st = UTW_E_INTERNAL;
     utw_idealisation *ideal = NULL;
     utw_area area;
-    if (outline == NULL || idealisation == NULL)
-        return utw_fail(err, UTW_E_ARGUMENT,
-                        "utw_idealise: outline and idealisation must not be NULL");
+    int holes = 0;
     UTW_TRY_ALLOC(ideal = utw_alloc(1, sizeof *ideal));
     UTW_TRY(utw_area_compute(outline, NULL, &area, err));
-    if (utw_outline_midline(outline) != NULL)
-        UTW_TRY(take(ideal, outline, err));
-    else
+    if (midline != NULL) {
+        UTW_TRY(count_holes(outline, &holes, err));
+        UTW_TRY(take(ideal, midline, holes, err));
+    } else {
         UTW_TRY(find(ideal, outline, area.A, density, err));
+    }
     share_of_corners(ideal, area.A);
     check_against_outline(ideal, &area);
     UTW_TRY(check_sense(ideal, err));
@@ -233,7 +243,29 @@ done:
     return st;
 }
 
+utw_status utw_idealise_with(const utw_outline *outline, double density,
+                             utw_idealisation **idealisation, utw_error *err)
+{
+    if (outline == NULL || idealisation == NULL)
+        return utw_fail(err, UTW_E_ARGUMENT,
+                        "utw_idealise: outline and idealisation must not be NULL");
+    return idealise(outline, utw_outline_midline(outline), density, idealisation, err);
+}
+
 utw_status utw_idealise(const utw_outline *outline, utw_idealisation **idealisation, utw_error *err)
 {
     return utw_idealise_with(outline, 1, idealisation, err);
+}
+
+utw_status utw_idealise_as(const utw_outline *outline, const utw_midline *midline,
+                           utw_idealisation **idealisation, utw_error *err)
+{
+    utw_thin *thin = NULL;
+    if (outline == NULL || midline == NULL || idealisation == NULL)
+        return utw_fail(err, UTW_E_ARGUMENT,
+                        "utw_idealise_as: outline, midline and idealisation must not be NULL");
+    /* it is checked before its walls are rated */
+    const utw_status st = utw_thin_solve(midline, &thin, err);
+    utw_thin_free(thin);
+    return st == UTW_OK ? idealise(outline, midline, 1, idealisation, err) : st;
 }
