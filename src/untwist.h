@@ -702,6 +702,48 @@ UTW_API UTW_CHECK utw_status utw_midline_file(const utw_midline *midline, const 
 /** Free a report; NULL is allowed. */
 UTW_API void utw_report_free(char *text);
 
+/* ---- pictures ------------------------------------------------------------------------------------ */
+
+/** Kinds of pictures. */
+typedef enum utw_picture {
+    UTW_PICTURE_OUTLINE = 0, /* outline, extent, centroid, shear centre, centre of flexure, principal axes */
+    UTW_PICTURE_MESH,        /* elements, their orders, the layers in the corners */
+    UTW_PICTURE_WARPING,     /* warping function about the shear centre, as contours */
+    UTW_PICTURE_WARPED,      /* tilted view of the warped end of the bar */
+    UTW_PICTURE_COUNT
+} utw_picture;
+
+/** Key of a kind, such as "warping". Returned borrowed; NULL when out of range. */
+UTW_API const char *utw_picture_key(utw_picture which);
+
+/** What it shows, in a few words. Returned borrowed; NULL when out of range. */
+UTW_API const char *utw_picture_meaning(utw_picture which);
+
+/** How to draw. Start from UTW_DRAW_OPTIONS_INIT. */
+typedef struct utw_draw_options {
+    int version;  /* 1 */
+    double width; /* of the page, 40 .. 1200 [mm]; its height follows */
+    double dpi;   /* dots per inch of a PNG, 20 .. 2400 */
+} utw_draw_options;
+
+#define UTW_DRAW_OPTIONS_INIT {1, 160.0, 150.0}
+
+/** Draw and write as the ending of the path asks: .svg, .pdf, .png. [in] solution, options (NULL: the defaults),
+ *  path, borrowed. An existing file is replaced. UTW_E_ARGUMENT; UTW_E_FILE when the path cannot be written;
+ *  UTW_E_NOMEM. */
+UTW_API UTW_CHECK utw_status utw_draw(const utw_solution *solution, utw_picture what,
+                                      const utw_draw_options *options, const char *path, utw_error *err);
+
+typedef enum utw_picture_format { UTW_SVG = 0, UTW_PDF, UTW_PNG } utw_picture_format;
+
+/** The same as a file in memory: [out] *bytes [*n], returned owned: utw_draw_free(). */
+UTW_API UTW_CHECK utw_status utw_draw_bytes(const utw_solution *solution, utw_picture what,
+                                            const utw_draw_options *options, utw_picture_format format,
+                                            unsigned char **bytes, size_t *n, utw_error *err);
+
+/** Free them; NULL is allowed. */
+UTW_API void utw_draw_free(unsigned char *bytes);
+
 #ifdef __cplusplus
 }
 #endif

@@ -3,8 +3,8 @@
 # Installs the Debian packages that are missing. Usage: install.sh [tests]
 set -eu
 want="gcc g++ make cmake pkg-config libgmsh-dev libsuitesparse-dev libcjson-dev libopenblas-dev libcairo2-dev
-libmuparser-dev"
-[ "${1:-}" = tests ] && want="$want libcmocka-dev freefem++ libxml2-utils poppler-utils python3"
+libmuparser-dev zlib1g-dev fonts-dejavu-core"
+[ "${1:-}" = tests ] && want="$want libcmocka-dev freefem++ libxml2-utils poppler-utils python3 python3-vtk9"
 missing=
 for package in $want; do
     dpkg-query -W -f='${Status}' "$package" 2>/dev/null | grep -q 'ok installed' || missing="$missing $package"

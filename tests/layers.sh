@@ -31,6 +31,7 @@ foreign() { # header pattern, folders that may name it
 foreign 'gmshc?\.h' mesh
 foreign 'cholmod\.h' field
 foreign 'cairo' draw
+foreign 'zlib' draw
 foreign 'cjson/' "outline report"
 foreign 'muParser' outline
 exit $bad

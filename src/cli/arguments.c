@@ -92,29 +92,42 @@ static int read_number(const reading *r, const cli_option *option, const char *t
     return CLI_USAGE;
 }
 
-/* --name, --name VALUE or --name=VALUE at r->next. */
+/* The option that is written --name or --name=VALUE, or -o for --output. */
+static const cli_option *find_option(const cli_command *command, const char *argument)
+{
+    const int is_short = argument[1] != '-';
+    const char *name = argument + (is_short ? 1 : 2);
+    const size_t length = is_short ? strlen(name) : strcspn(name, "=");
+    for (int i = 0; i < command->n_option; i++) {
+        const cli_option *o = &command->option[i];
+        if (is_short ? strcmp(name, "o") == 0 && strcmp(o->name, "output") == 0
+                     : strlen(o->name) == length && strncmp(o->name, name, length) == 0)
+            return o;
+    }
+    return NULL;
+}
+
+/* --name, --name VALUE, --name=VALUE or -o VALUE at r->next. */
 static int read_option(reading *r)
 {
     const char *name = r->argument[r->next] + 2;
-    const size_t length = strcspn(name, "=");
-    const cli_option *option = NULL;
-    for (int i = 0; i < r->command->n_option && option == NULL; i++) {
-        const cli_option *o = &r->command->option[i];
-        if (strlen(o->name) == length && strncmp(o->name, name, length) == 0) option = o;
-    }
-    if (option == NULL) return unknown_option(r, name, length);
+    const int is_short = r->argument[r->next][1] != '-';
     const cli_command *command = r->command;
+    const cli_option *option = find_option(command, r->argument[r->next]);
+    if (option == NULL && is_short) return refuse(r, "unknown option", r->argument[r->next]);
+    const size_t length = is_short ? 0 : strcspn(name, "=");
+    if (option == NULL) return unknown_option(r, name, length);
     if (!option->repeats && cli_option_given(r->call, option->name, 0) != NULL) {
         cli_message("%s: --%s is given twice", command->name, option->name);
         return CLI_USAGE;
     }
     cli_given given = {option, NULL, 0};
     if (option->kind == CLI_FLAG) {
-        if (name[length] == '=') {
+        if (!is_short && name[length] == '=') {
             cli_message("%s: --%s takes no value", command->name, option->name);
             return CLI_USAGE;
         }
-    } else if (name[length] == '=') {
+    } else if (!is_short && name[length] == '=') {
         given.text = name + length + 1;
     } else if (r->next + 1 < r->n && strncmp(r->argument[r->next + 1], "--", 2) != 0) {
         given.text = r->argument[++r->next];
@@ -165,10 +178,8 @@ int cli_read_arguments(const cli_command *command, int n, char **argument, cli_c
         const char *a = argument[r.next];
         if (options && strcmp(a, "--") == 0)
             options = 0;
-        else if (options && strncmp(a, "--", 2) == 0)
-            status = read_option(&r);
         else if (options && a[0] == '-' && a[1] != '\0')
-            status = refuse(&r, "unknown option", a);
+            status = read_option(&r);
         else
             status = read_operand(&r);
     }

@@ -6,7 +6,7 @@
 /** What an option takes. */
 typedef enum cli_kind { CLI_FLAG, CLI_TEXT, CLI_NUMBER, CLI_INTEGER } cli_kind;
 
-/** An option of a command, given as --name, --name VALUE or --name=VALUE. */
+/** An option of a command, given as --name, --name VALUE or --name=VALUE; "output" also as -o. */
 typedef struct cli_option {
     const char *name, *value; /* without the dashes; placeholder of the value, NULL for a flag */
     const char *meaning;

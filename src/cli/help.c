@@ -27,7 +27,7 @@ static void write_entry(utw_text *text, const char *typed, const char *value, co
 static void write_option(utw_text *text, const cli_option *o)
 {
     char typed[64];
-    snprintf(typed, sizeof typed, "--%s", o->name);
+    snprintf(typed, sizeof typed, "%s--%s", strcmp(o->name, "output") == 0 ? "-o, " : "", o->name);
     write_entry(text, typed, o->value, o->meaning);
 }
 

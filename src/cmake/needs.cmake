@@ -6,7 +6,7 @@ set(untwist_missing)
 if(NOT PkgConfig_FOUND)
   list(APPEND untwist_missing pkg-config)
 else()
-  foreach(need cjson:libcjson muparser:muparser cairo:cairo cairo_pdf:cairo-pdf cairo_svg:cairo-svg lapack:lapack
+  foreach(need cjson:libcjson muparser:muparser cairo:cairo cairo_pdf:cairo-pdf cairo_svg:cairo-svg zlib:zlib lapack:lapack
       blas:blas)
     string(REPLACE ":" ";" need ${need})
     list(GET need 0 name)
@@ -35,5 +35,5 @@ foreach(name gmsh cholmod)
   endif()
 endforeach()
 set(untwist_needs untwist::gmsh untwist::cholmod PkgConfig::untwist_cjson PkgConfig::untwist_muparser
-  PkgConfig::untwist_cairo PkgConfig::untwist_cairo_pdf PkgConfig::untwist_cairo_svg PkgConfig::untwist_lapack
+  PkgConfig::untwist_cairo PkgConfig::untwist_cairo_pdf PkgConfig::untwist_cairo_svg PkgConfig::untwist_zlib PkgConfig::untwist_lapack
   PkgConfig::untwist_blas m)
