@@ -554,6 +554,7 @@ typedef struct utw_wall_info {
     utw_wall_kind kind;
     double length;      /* from node to node [L] */
     double thickness;   /* mean [L] */
+    double plate_length; /* of the plate it is part of [L] */
     double slenderness; /* length over thickness of the plate it is part of: pieces that go on smoothly with about
                            the same thickness are one [1] */
     int slender;        /* 1: slenderness of at least 3, the least to be thought of as a wall */
@@ -662,6 +663,50 @@ UTW_API const char *utw_comparison_reason(const utw_comparison *comparison, int 
 /** Its idealisation. Returned borrowed. */
 UTW_API const utw_idealisation *utw_comparison_idealisation(const utw_comparison *comparison);
 
+/* ---- the thickness study -------------------------------------------------------------------------- */
+
+/** Factors on the thickness of all walls: `steps` equal steps. */
+typedef struct utw_study_range {
+    double from, to; /* 1e-3 .. 1e3 [1] */
+    int steps;       /* 2 .. 500 */
+} utw_study_range;
+
+/** One step. */
+typedef struct utw_study_step {
+    double factor;
+    double thickness;   /* mean of all walls [L] */
+    double ratio;       /* over the length of the longest plate [1] */
+    const char *failed; /* NULL; else why the midline cannot have this thickness. Borrowed */
+} utw_study_step;
+
+/** Both theories as the walls of a midline grow thicker. */
+typedef struct utw_study utw_study;
+
+/** Give the walls of the idealisation's midline the factors times their thickness, thicken it (mitred corners, no
+ *  fillets), and compare both theories at each step. [in] outline: whose units and material are used; idealisation;
+ *  options, of the solid solutions, NULL for the defaults; range; limit as of utw_compare(); all borrowed.
+ *  [out] *study, returned owned: utw_study_free(). Calls the mesher. A step at which the walls do not fit says so.
+ *  UTW_E_ARGUMENT, UTW_E_NOMEM; UTW_E_NO_THIN_WALL when no step can be thickened. */
+UTW_API UTW_CHECK utw_status utw_thickness_study(const utw_outline *outline, const utw_idealisation *idealisation,
+                                                 const utw_options *options, const utw_study_range *range,
+                                                 double limit, utw_study **study, utw_error *err);
+
+/** Free it; NULL is allowed. */
+UTW_API void utw_study_free(utw_study *study);
+
+/** How many steps, one of them (NULL when out of range), the limit. Returned borrowed. */
+UTW_API int utw_study_count(const utw_study *study);
+UTW_API const utw_study_step *utw_study_get(const utw_study *study, int step);
+UTW_API double utw_study_limit(const utw_study *study);
+
+/** The difference of a constant at a step, as utw_compared.difference. [out] *difference, untouched when there is none;
+ *  then 0 is returned, else 1. */
+UTW_API int utw_study_difference(const utw_study *study, int step, utw_constant which, double *difference);
+
+/** Where a constant crosses the limit, such as "J: within 5 % up to t = 6.3 mm (t/b = 0.11)"; linear between steps. NULL
+ *  when it was never compared. Returned borrowed. */
+UTW_API const char *utw_study_statement(const utw_study *study, utw_constant which);
+
 /* ---- reports ------------------------------------------------------------------------------------- */
 
 /** What a report tells. Start from UTW_REPORT_INIT; what stays NULL is left out. */
@@ -670,9 +715,10 @@ typedef struct utw_report {
     const utw_solution *solution; /* borrowed; required */
     const utw_cases *cases;       /* borrowed: load cases and probes of this solution */
     const utw_comparison *comparison; /* borrowed: of this solution; in the JSON and in utw_report_comparison() */
+    const utw_study *study;           /* borrowed: beside a comparison */
 } utw_report;
 
-#define UTW_REPORT_INIT {1, NULL, NULL, NULL}
+#define UTW_REPORT_INIT {1, NULL, NULL, NULL, NULL}
 
 /** A table for people: the constants with their bounds, trust and units, what is left out and why, what
  *  the solution took. Plain text of at most 100 columns at usual tolerances. Angles are in degrees.

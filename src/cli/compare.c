@@ -1,5 +1,6 @@
 /* SPDX-License-Identifier: GPL-3.0-or-later
  * untwist compare: the thin-walled idealisation of a section beside its solid solution. */
+#include <stdio.h>
 #include <string.h>
 
 #include "base/nearest.h"
@@ -8,6 +9,8 @@
 #include "cli/output.h"
 #include "cli/section.h"
 
+#define STUDY_TOLERANCE                                                                            \
+    1e-4          /* of each step, unless asked for otherwise: a hundredth of a per cent */
 #define LIMIT 5.0 /* per cent: common practice for hand calculations */
 
 /* What is compared of one section. */
@@ -16,6 +19,7 @@ typedef struct work {
     utw_outline *other; /* drawn by the midline to be taken */
     utw_idealisation *idealisation;
     utw_comparison *comparison;
+    utw_study *study;
 } work;
 
 static int fail_at(const char *option, const utw_error *err)
@@ -118,12 +122,47 @@ static int write_midline(const cli_call *call, const work *w)
     return status;
 }
 
+/* FROM:TO:STEPS */
+static int read_range(const cli_call *call, utw_study_range *range)
+{
+    const char *text = cli_text(call, "thickness");
+    int used = -1;
+    double steps = 0;
+    if (text == NULL) return CLI_DONE;
+    if (strspn(text, "0123456789.eE+-:") == strlen(text) &&
+        sscanf(text, "%lf:%lf:%lf%n", &range->from, &range->to, &steps, &used) == 3 &&
+        text[used] == '\0' && range->from >= 1e-3 && range->from < range->to && range->to <= 1e3 &&
+        steps >= 2 && steps <= 500 && steps == (int)steps) {
+        range->steps = (int)steps;
+        return CLI_DONE;
+    }
+    cli_message(
+        "compare: --thickness takes FROM:TO:STEPS, rising factors from 0.001 to 1000 in 2 to "
+        "500 steps, such as 0.25:3:12, not '%s'",
+        text);
+    return CLI_USAGE;
+}
+
+static int run_study(const cli_call *call, const utw_study_range *range, work *w)
+{
+    utw_error err;
+    utw_options options = UTW_OPTIONS_INIT;
+    if (cli_text(call, "thickness") == NULL) return CLI_DONE;
+    options.tolerance = STUDY_TOLERANCE;
+    cli_solving_options(call, &options);
+    if (utw_thickness_study(w->section.outline, w->idealisation, &options, range,
+                            utw_comparison_limit(w->comparison), &w->study, &err) == UTW_OK)
+        return CLI_DONE;
+    return fail_at("--thickness", &err);
+}
+
 static int write_reports(const cli_call *call, const work *w)
 {
     const char *json = cli_text(call, "json");
     utw_report report = UTW_REPORT_INIT;
     report.solution = w->section.solution;
     report.comparison = w->comparison;
+    report.study = w->study;
     int status = CLI_DONE;
     if (json != NULL) status = cli_write_report(utw_report_json, &report, json);
     if (status == CLI_DONE && !cli_flag(call, "quiet") && !cli_to_output(call, "json") &&
@@ -144,10 +183,12 @@ static int check_files(const cli_call *call)
 
 static int run(const cli_call *call)
 {
-    work w = {{NULL, NULL}, NULL, NULL, NULL};
+    work w = {{NULL, NULL}, NULL, NULL, NULL, NULL};
     utw_error err;
+    utw_study_range range = {1, 1, 2};
     int status = check_files(call);
     if (status == CLI_DONE) status = check_required(call);
+    if (status == CLI_DONE) status = read_range(call, &range);
     if (status == CLI_DONE) status = cli_read_section(call, &w.section);
     /* the midline first: a section that has none needs no solution */
     if (status == CLI_DONE) status = idealise(call, &w);
@@ -157,9 +198,13 @@ static int run(const cli_call *call)
         utw_compare(w.section.solution, w.idealisation, 0.01 * cli_number(call, "limit", LIMIT),
                     &w.comparison, &err) != UTW_OK)
         status = cli_fail(&err);
+    int studied = CLI_DONE;
+    if (status == CLI_DONE) studied = run_study(call, &range, &w);
     if (status == CLI_DONE) status = write_reports(call, &w);
+    if (status == CLI_DONE) status = studied;
     if (status == CLI_DONE) status = judge_required(call, w.comparison);
     if (status == CLI_DONE) status = cli_check_reached(w.section.solution);
+    utw_study_free(w.study);
     utw_comparison_free(w.comparison);
     utw_idealisation_free(w.idealisation);
     utw_outline_free(w.other);
@@ -182,6 +227,10 @@ static const cli_option options[] = {
      CLI_TEXT, 0, 0, 0},
     {"with", "FILE",
      "Take the midline of this section file in place of the one in the drawing or found in it.",
+     CLI_TEXT, 0, 0, 0},
+    {"thickness", "FROM:TO:STEPS",
+     "Compare again with all walls of the midline these factors times as thick, such as 0.25:3:12, "
+     "and say where each quantity crosses the limit.",
      CLI_TEXT, 0, 0, 0},
     CLI_SOLVING_OPTIONS,
     {"json", "FILE",

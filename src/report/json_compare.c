@@ -103,6 +103,37 @@ static void add_reasons(utw_json_writer *w, cJSON *to)
     }
 }
 
+static void add_study(utw_json_writer *w, cJSON *to)
+{
+    const utw_study *s = w->report->study;
+    if (s == NULL) return;
+    cJSON *study = utw_json_add_object(w, to, "study");
+    cJSON *steps = utw_json_add_array(w, study, "steps");
+    for (int i = 0; i < utw_study_count(s); i++) {
+        const utw_study_step *step = utw_study_get(s, i);
+        cJSON *one = utw_json_append_object(w, steps);
+        utw_json_add_number(w, one, "factor", step->factor);
+        utw_json_add_number(w, one, "thickness", step->thickness);
+        utw_json_add_number(w, one, "ratio", step->ratio);
+        if (step->failed != NULL) {
+            utw_json_add_text(w, one, "reason", step->failed);
+            continue;
+        }
+        cJSON *difference = utw_json_add_object(w, one, "difference");
+        for (int k = 0; k < UTW_CONSTANT_COUNT; k++) {
+            double d;
+            if (utw_study_difference(s, i, (utw_constant)k, &d))
+                utw_json_add_number(w, difference, utw_constant_key((utw_constant)k), d);
+        }
+    }
+    cJSON *limits = utw_json_add_object(w, study, "limits");
+    for (int k = 0; k < UTW_CONSTANT_COUNT; k++) {
+        const char *statement = utw_study_statement(s, (utw_constant)k);
+        if (statement != NULL)
+            utw_json_add_text(w, limits, utw_constant_key((utw_constant)k), statement);
+    }
+}
+
 void utw_json_add_comparison(utw_json_writer *w, cJSON *root)
 {
     const utw_comparison *c = w->report->comparison;
@@ -127,4 +158,5 @@ void utw_json_add_comparison(utw_json_writer *w, cJSON *root)
     add_quantities(w, compare);
     add_midline(w, compare, utw_idealisation_midline(ideal));
     add_slenderness(w, compare, ideal);
+    add_study(w, compare);
 }

@@ -8,6 +8,7 @@
 #include "base/text.h"
 #include "report/number.h"
 #include "report/report.h"
+#include "report/text_study.h"
 #include "section/solution.h"
 
 enum { WIDTH = 100, INDENT = 12, THIN_DIGITS = 6, COLUMNS = 7, MOST = 64 /* walls */ };
@@ -267,6 +268,7 @@ static void write_all(const utw_report *report, utw_text *text)
     utw_text_wrap(text, INDENT, WIDTH, utw_report_caution(report->solution));
     utw_text_add(text, "\n");
     write_walls(report, text);
+    utw_report_text_study(report, text);
 }
 
 utw_status utw_report_comparison(const utw_report *report, char **text, utw_error *err)

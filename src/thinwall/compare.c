@@ -16,6 +16,18 @@ static const utw_constant compared[UTW_COMPARED] = {UTW_A,   UTW_XC, UTW_YC, UTW
                                                     UTW_IXY, UTW_I1, UTW_I2, UTW_J,   UTW_WT,
                                                     UTW_XS,  UTW_YS, UTW_IW, UTW_ASX, UTW_ASY};
 
+int utw_compared_index(utw_constant which)
+{
+    for (int k = 0; k < UTW_COMPARED; k++)
+        if (compared[k] == which) return k;
+    return -1;
+}
+
+utw_constant utw_compared_constant(int row)
+{
+    return compared[row];
+}
+
 void utw_comparison_free(utw_comparison *c)
 {
     if (c == NULL) return;

@@ -19,6 +19,10 @@ struct utw_comparison {
     char *reason[UTW_MOST_REASONS]; /* [n_reason], owned */
 };
 
+/** Row of a constant in a comparison, -1 when it is not compared; and the constant of a row. */
+int utw_compared_index(utw_constant which);
+utw_constant utw_compared_constant(int row);
+
 /** Write the verdict from the rows. */
 void utw_verdict_write(const utw_comparison *comparison, utw_text *text);
 

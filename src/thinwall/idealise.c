@@ -217,7 +217,7 @@ static utw_status count_holes(const utw_outline *outline, int *holes, utw_error 
 }
 
 static utw_status idealise(const utw_outline *outline, const utw_midline *midline, double density,
-                           utw_idealisation **idealisation, utw_error *err)
+                           int must_make_sense, utw_idealisation **idealisation, utw_error *err)
 {
     utw_status st = UTW_E_INTERNAL;
     utw_idealisation *ideal = NULL;
@@ -233,7 +233,7 @@ static utw_status idealise(const utw_outline *outline, const utw_midline *midlin
     }
     share_of_corners(ideal, area.A);
     check_against_outline(ideal, &area);
-    UTW_TRY(check_sense(ideal, err));
+    if (must_make_sense) UTW_TRY(check_sense(ideal, err));
     UTW_TRY(solve(ideal, err));
     *idealisation = ideal;
     ideal = NULL;
@@ -249,7 +249,7 @@ utw_status utw_idealise_with(const utw_outline *outline, double density,
     if (outline == NULL || idealisation == NULL)
         return utw_fail(err, UTW_E_ARGUMENT,
                         "utw_idealise: outline and idealisation must not be NULL");
-    return idealise(outline, utw_outline_midline(outline), density, idealisation, err);
+    return idealise(outline, utw_outline_midline(outline), density, 1, idealisation, err);
 }
 
 utw_status utw_idealise(const utw_outline *outline, utw_idealisation **idealisation, utw_error *err)
@@ -267,5 +267,11 @@ utw_status utw_idealise_as(const utw_outline *outline, const utw_midline *midlin
     /* it is checked before its walls are rated */
     const utw_status st = utw_thin_solve(midline, &thin, err);
     utw_thin_free(thin);
-    return st == UTW_OK ? idealise(outline, midline, 1, idealisation, err) : st;
+    return st == UTW_OK ? idealise(outline, midline, 1, 1, idealisation, err) : st;
+}
+
+utw_status utw_idealise_given(const utw_outline *outline, const utw_midline *midline,
+                              utw_idealisation **idealisation, utw_error *err)
+{
+    return idealise(outline, midline, 1, 0, idealisation, err);
 }

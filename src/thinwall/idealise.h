@@ -22,4 +22,9 @@ struct utw_idealisation {
 utw_status utw_idealise_with(const utw_outline *outline, double density,
                              utw_idealisation **idealisation, utw_error *err);
 
+/** utw_idealise_as() of a midline known to be sound, without asking whether the section makes sense
+ * as a thin-walled one. */
+utw_status utw_idealise_given(const utw_outline *outline, const utw_midline *midline,
+                              utw_idealisation **idealisation, utw_error *err);
+
 #endif

@@ -127,6 +127,7 @@ static utw_status rate_plates(rater *r, utw_error *err)
     }
     for (int i = 0; i < m->n_walls; i++) {
         const double *s = sum[root(r, i)];
+        r->ideal->wall[i].plate_length = s[0];
         r->ideal->wall[i].slenderness = s[0] * s[0] / s[1];
         r->ideal->wall[i].slender =
             r->ideal->wall[i].kind == UTW_WALL_PLATE && s[0] * s[0] >= (UTW_SLENDER - 1e-9) * s[1];

@@ -62,6 +62,23 @@ static void the_midline_can_be_fed_back(void **state)
                "untwist: compare: --json and --midline cannot both go to standard output\n");
 }
 
+static void the_thickness_study(void **state)
+{
+    (void)state;
+    char *output = NULL;
+    assert_int_equal(
+        run_untwist("compare machined-channel.json --thickness 0.5:2:4 --tol 1e-3", &output), 0);
+    assert_non_null(strstr(output, "\nThickness study: difference in per cent, as above\n"));
+    assert_non_null(strstr(output, "\n     1.5  0.4009   0.109 "));
+    assert_non_null(strstr(output, "            J: within 5 % up to t = 0.38"));
+    free(output);
+    expect_run("compare machined-channel.json --thickness 1:1:3", 2,
+               "untwist: compare: --thickness takes FROM:TO:STEPS, rising factors from 0.001 to "
+               "1000 in 2 to 500 steps, such as 0.25:3:12, not '1:1:3'\n");
+    expect_run("compare machined-channel.json --thickness 1:2", 2,
+               "untwist: compare: --thickness ");
+}
+
 static void json_goes_to_standard_output(void **state)
 {
     (void)state;
@@ -79,6 +96,7 @@ int main(void)
         cmocka_unit_test(what_is_required_decides_the_status),
         cmocka_unit_test(a_lump_gets_a_sentence),
         cmocka_unit_test(the_midline_can_be_fed_back),
+        cmocka_unit_test(the_thickness_study),
         cmocka_unit_test(json_goes_to_standard_output),
     };
     return cmocka_run_group_tests(tests, NULL, NULL);
