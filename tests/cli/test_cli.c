@@ -126,13 +126,57 @@ static void wrong_use_is_told(void **state)
     expect_run("help solve shape", 2, "untwist: help: one operand too many: 'shape'");
 }
 
+/* The real program ends with every status that docs/untwist.1 lists, but for those of checks that
+ * are asked for. */
+static void the_program_ends_with_its_status(void **state)
+{
+    (void)state;
+    static const struct {
+        const char *arguments;
+        int status;
+    } list[] = {
+        {"solve corner-bracket.json >/dev/null", 0},
+        {"solve corner-bracket.json --tol 2 2>&1", 2},
+        {"solve no-such-file.json 2>&1", 3},
+        {"solve corner-bracket.json --order 2 --quiet 2>&1", 5},
+    };
+    for (size_t i = 0; i < sizeof list / sizeof *list; i++) {
+        char *output = NULL;
+        assert_int_equal(run_untwist(list[i].arguments, &output), list[i].status);
+        free(output);
+    }
+}
+
+/* What the process may have is narrowed until a solution that needs some 100 MB does not fit. */
+static void too_little_memory_is_no_result(void **state)
+{
+    (void)state;
+#ifdef __SANITIZE_ADDRESS__
+    skip(); /* the sanitizer itself asks for terabytes of addresses */
+#endif
+    static const int limit[] = {400, 500, 350, 600}; /* MB: what the libraries take differs */
+    int found = 0;
+    for (size_t i = 0; i < sizeof limit / sizeof *limit && !found; i++) {
+        char command[600], *output = NULL;
+        snprintf(command, sizeof command,
+                 "ulimit -v %d && OPENBLAS_NUM_THREADS=1 OMP_NUM_THREADS=1 timeout 60 \"%s\" "
+                 "solve \"%s/examples/t-slot-rail.json\" --tol 1e-12 --quiet 2>&1",
+                 limit[i] * 1000, UTW_PROGRAM, UTW_SOURCE_DIR);
+        if (utw_run(command, &output) == 4) {
+            assert_memory_equal(output, "untwist: out of memory", 22);
+            found = 1;
+        }
+        free(output);
+    }
+    assert_true(found);
+}
+
 static void output_that_cannot_be_written_is_an_error(void **state)
 {
     (void)state;
     char *output = NULL;
     if (utw_run("test -w /dev/full", &output) == 0) {
-        static const char *const quiet[] = {"--help", "--version", "help solve", "shape",
-                                            "solve corner-bracket.json"};
+        static const char *const quiet[] = {"--help", "shape", "solve corner-bracket.json"};
         for (size_t i = 0; i < sizeof quiet / sizeof *quiet; i++) {
             char arguments[100], *message = NULL;
             snprintf(arguments, sizeof arguments, "%s 2>&1 >/dev/full", quiet[i]);
@@ -157,6 +201,8 @@ int main(void)
         cmocka_unit_test(the_manual_page_has_every_option),
         cmocka_unit_test(version_names_the_libraries),
         cmocka_unit_test(wrong_use_is_told),
+        cmocka_unit_test(the_program_ends_with_its_status),
+        cmocka_unit_test(too_little_memory_is_no_result),
         cmocka_unit_test(output_that_cannot_be_written_is_an_error),
     };
     return cmocka_run_group_tests(tests, NULL, NULL);

@@ -2,24 +2,22 @@
  * The command "untwist shape", run as a user runs it. */
 #include <unistd.h>
 
+#include "cli/run.h"
 #include "outline/outline.h"
-#include "support/support.h"
 
 /* The output (with errors) and status of untwist shape ARGUMENTS. */
 static int run(const char *arguments, char **output)
 {
     char command[600];
-    snprintf(command, sizeof command, "\"%s\" shape %s 2>&1", UTW_PROGRAM, arguments);
-    return utw_run(command, output);
+    snprintf(command, sizeof command, "shape %s", arguments);
+    return run_untwist_all(command, output);
 }
 
 static void expect(const char *arguments, int status, const char *start)
 {
-    char *output = NULL;
-    assert_int_equal(run(arguments, &output), status);
-    if (strncmp(output, start, strlen(start)) != 0) print_error("%s\n", output);
-    assert_memory_equal(output, start, strlen(start));
-    free(output);
+    char command[600];
+    snprintf(command, sizeof command, "shape %s", arguments);
+    expect_run(command, status, start);
 }
 
 static void lists_and_shows(void **state)
