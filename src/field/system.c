@@ -211,6 +211,8 @@ utw_status utw_system_create(int n_block, const int *size, int n_element, const 
     s->common.method[0].ordering =
         CHOLMOD_NATURAL; /* the unknowns are numbered in elimination order already */
     s->common.postorder = 1;
+    /* L L', also of small matrices: L D L' would go on past pivots that are not positive */
+    s->common.final_ll = 1;
     s->n_block = n_block;
     UTW_TRY_ALLOC(s->size = utw_alloc((size_t)n_block, sizeof(int)));
     memcpy(s->size, size, (size_t)n_block * sizeof(int));
