@@ -11,4 +11,10 @@ for name in corner-bracket t-slot-rail two-chamber-mullion machined-channel keye
         "$untwist" draw "$top/examples/$name.json" --show "$kind" --width 100mm --dpi 110 -o "$top/docs/gallery/$kind-$name.png"
     done
 done
+for name in corner-bracket t-slot-rail two-chamber-mullion machined-channel keyed-shaft aerofoil-box bulb-flat solid-cam; do
+    for stress in von_mises sigma_z tau; do
+        "$untwist" draw "$top/examples/$name.json" --show stress --component "$stress" --width 100mm --dpi 110 \
+            -o "$top/docs/gallery/$stress-$name.png"
+    done
+done
 "$untwist" draw "$top/examples/t-slot-rail.json" --show warping --width 120mm --dpi 130 -o "$top/docs/warping.png"

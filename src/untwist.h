@@ -756,6 +756,7 @@ typedef enum utw_picture {
     UTW_PICTURE_MESH,        /* elements, their orders, the layers in the corners */
     UTW_PICTURE_WARPING,     /* warping function about the shear centre, as contours */
     UTW_PICTURE_WARPED,      /* tilted view of the warped end of the bar */
+    UTW_PICTURE_STRESS,      /* a stress of a load case as contours, shear with arrows */
     UTW_PICTURE_COUNT
 } utw_picture;
 
@@ -765,18 +766,34 @@ UTW_API const char *utw_picture_key(utw_picture which);
 /** What it shows, in a few words. Returned borrowed; NULL when out of range. */
 UTW_API const char *utw_picture_meaning(utw_picture which);
 
+/** Stresses that a picture may show. */
+typedef enum utw_stress_component {
+    UTW_SHOW_VON_MISES = 0,
+    UTW_SHOW_SIGMA_Z,
+    UTW_SHOW_TAU, /* sqrt(tau_xz^2 + tau_yz^2), with arrows for its direction */
+    UTW_SHOW_TAU_XZ,
+    UTW_SHOW_TAU_YZ,
+    UTW_STRESS_COMPONENT_COUNT
+} utw_stress_component;
+
+/** Key of a component, such as "sigma_z". Returned borrowed; NULL when out of range. */
+UTW_API const char *utw_stress_component_key(utw_stress_component which);
+
 /** How to draw. Start from UTW_DRAW_OPTIONS_INIT. */
 typedef struct utw_draw_options {
     int version;  /* 1 */
     double width; /* of the page, 40 .. 1200 [mm]; its height follows */
     double dpi;   /* dots per inch of a PNG, 20 .. 2400 */
+    const char *load_case; /* of the section file, for stresses; borrowed; NULL: the first */
+    utw_stress_component component;
 } utw_draw_options;
 
-#define UTW_DRAW_OPTIONS_INIT {1, 160.0, 150.0}
+#define UTW_DRAW_OPTIONS_INIT {1, 160.0, 150.0, NULL, UTW_SHOW_VON_MISES}
 
 /** Draw and write as the ending of the path asks: .svg, .pdf, .png. [in] solution, options (NULL: the defaults),
  *  path, borrowed. An existing file is replaced. UTW_E_ARGUMENT; UTW_E_FILE when the path cannot be written;
- *  UTW_E_NOMEM. */
+ *  UTW_E_NOMEM; for stresses UTW_E_LOAD when there is no such load case or the section cannot carry it, and
+ *  UTW_E_MATERIAL as of utw_stress_create() and utw_stress_at(). */
 UTW_API UTW_CHECK utw_status utw_draw(const utw_solution *solution, utw_picture what,
                                       const utw_draw_options *options, const char *path, utw_error *err);
 

@@ -30,6 +30,18 @@ static int read_kind(const char *name, utw_picture *kind)
     return CLI_USAGE;
 }
 
+/* The stress that --component names. Returns CLI_DONE, or CLI_USAGE after a message. */
+static int read_component(const char *name, utw_stress_component *component)
+{
+    for (int k = 0; k < UTW_STRESS_COMPONENT_COUNT; k++) {
+        if (strcmp(utw_stress_component_key((utw_stress_component)k), name) != 0) continue;
+        *component = (utw_stress_component)k;
+        return CLI_DONE;
+    }
+    cli_message("draw: --component %s: it must be von_mises, sigma_z, tau, tau_xz or tau_yz", name);
+    return CLI_USAGE;
+}
+
 /* "160mm", "16cm", "6.3in" or "160" (mm). */
 static int read_width(const char *text, double *width)
 {
@@ -71,14 +83,21 @@ static int check_output(const cli_call *call)
 static int run(const cli_call *call)
 {
     const char *output = cli_text(call, "output"), *width = cli_text(call, "width"),
-               *show = cli_text(call, "show");
+               *show = cli_text(call, "show"), *component = cli_text(call, "component");
     utw_draw_options options = UTW_DRAW_OPTIONS_INIT;
     utw_picture kind = UTW_PICTURE_OUTLINE;
     utw_error err;
     cli_section section;
     if (show != NULL && read_kind(show, &kind) != CLI_DONE) return CLI_USAGE;
     if (width != NULL && read_width(width, &options.width) != CLI_DONE) return CLI_USAGE;
+    if (component != NULL && read_component(component, &options.component) != CLI_DONE)
+        return CLI_USAGE;
+    if (kind != UTW_PICTURE_STRESS && (component != NULL || cli_text(call, "case") != NULL)) {
+        cli_message("draw: --case and --component are for --show stress");
+        return CLI_USAGE;
+    }
     if (check_output(call) != CLI_DONE) return CLI_USAGE;
+    options.load_case = cli_text(call, "case");
     options.dpi = cli_number(call, "dpi", options.dpi);
     int status = cli_solve_section(call, &section);
     if (status == CLI_DONE) {
@@ -97,6 +116,11 @@ static const cli_option options[] = {
      CLI_TEXT, 0, 0, 0},
     {"show", "KIND", "What to draw; outline when it is not given. The kinds are listed above.",
      CLI_TEXT, 0, 0, 0},
+    {"case", "NAME", "The load case of a stress picture. Without it: the first of the file.",
+     CLI_TEXT, 0, 0, 0},
+    {"component", "STRESS",
+     "Stress to draw: von_mises, sigma_z, tau, tau_xz or tau_yz. Without it: von_mises.", CLI_TEXT,
+     0, 0, 0},
     {"width", "LENGTH",
      "Width of the page, 40 mm to 1200 mm, given as 160mm, 16cm or 6.3in; its height follows. "
      "Without it: 160mm.",
@@ -108,12 +132,13 @@ static const cli_option options[] = {
 const cli_command cli_draw = {
     "draw",
     "FILE",
-    "pictures of a section: outline, mesh, warping",
+    "pictures of a section: outline, mesh, warping, stresses",
     "Reads and solves a section file ('-' is standard input) and draws one picture of it. Kinds:\n"
     "outline: extent, centroid, shear centre, centre of flexure, principal axes\n"
     "mesh: elements, their orders, the layers in the corners\n"
     "warping: warping function about the shear centre, as contours\n"
-    "warped: tilted view of the warped end of the bar",
+    "warped: tilted view of the warped end of the bar\n"
+    "stress: a stress of a load case, as contours; tau with arrows",
     1,
     1,
     sizeof options / sizeof options[0],

@@ -23,6 +23,8 @@ static const kind kinds[UTW_PICTURE_COUNT] = {
                              utw_picture_warping},
     [UTW_PICTURE_WARPED] = {"warped", "tilted view of the warped end of the bar",
                             utw_picture_warped},
+    [UTW_PICTURE_STRESS] = {"stress", "a stress of a load case as contours, shear with arrows",
+                            utw_picture_stress},
 };
 
 const char *utw_picture_key(utw_picture which)
@@ -49,6 +51,9 @@ static utw_status check_options(const utw_draw_options *o, utw_error *err)
     if (!(o->dpi >= 20 && o->dpi <= 2400))
         return utw_fail(err, UTW_E_ARGUMENT,
                         "drawing options: %g dots per inch is outside 20 .. 2400", o->dpi);
+    if (utw_stress_component_key(o->component) == NULL)
+        return utw_fail(err, UTW_E_ARGUMENT, "drawing options: component %d is outside 0 .. %d",
+                        (int)o->component, UTW_STRESS_COMPONENT_COUNT - 1);
     return UTW_OK;
 }
 

@@ -74,6 +74,20 @@ void utw_mark_sign(utw_canvas *c, int sign, double x, double y, double size)
         utw_canvas_line(c, x, y + 1.3 * r);
         utw_canvas_stroke(c, &pen);
         break;
+    case UTW_SIGN_LOAD:
+        pen.colour = utw_accent();
+        utw_canvas_circle(c, x, y, r);
+        utw_canvas_fill(c, utw_white(), 0.8);
+        utw_canvas_circle(c, x, y, r);
+        utw_canvas_stroke(c, &pen);
+        utw_canvas_circle(c, x, y, 0.55 * r);
+        utw_canvas_fill(c, utw_accent(), 1);
+        break;
+    case UTW_SIGN_CORNER:
+        pen.colour = utw_accent();
+        utw_canvas_circle(c, x, y, 0.6 * r);
+        utw_canvas_stroke(c, &pen);
+        break;
     case UTW_SIGN_AXIS:
         pen.width *= 0.8;
         utw_canvas_move(c, x - 1.4 * r, y);

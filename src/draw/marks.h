@@ -14,6 +14,8 @@ enum {
     UTW_SIGN_FLEXURE,      /* a triangle */
     UTW_SIGN_ORIGIN,       /* a small open circle on a cross */
     UTW_SIGN_AXIS,         /* a piece of a dash-dot line */
+    UTW_SIGN_LOAD,         /* a full circle with a ring */
+    UTW_SIGN_CORNER,       /* a small open circle */
     UTW_SIGN_LEAST,        /* a triangle pointing down */
     UTW_SIGN_GREATEST      /* a triangle pointing up */
 };

@@ -49,6 +49,8 @@ utw_status utw_picture_outline(const utw_sitting *sitting, utw_error *err);
 utw_status utw_picture_mesh(const utw_sitting *sitting, utw_error *err);
 utw_status utw_picture_warping(const utw_sitting *sitting, utw_error *err);
 utw_status utw_picture_warped(const utw_sitting *sitting, utw_error *err);
+/** Also UTW_E_LOAD: no load case, or none of that name; UTW_E_MATERIAL. */
+utw_status utw_picture_stress(const utw_sitting *sitting, utw_error *err);
 
 /** Draw any of them. UTW_E_ARGUMENT: unknown, or options out of range. */
 utw_status utw_picture_draw(const utw_solution *solution, utw_picture what,

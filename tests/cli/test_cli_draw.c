@@ -45,7 +45,8 @@ static void kinds_and_formats(void **state)
                    "pdfinfo $f | grep -q 'Page size: *453.6'");
     draw_and_check("--show mesh --width=16cm --dpi 100", "c.png",
                    "head -c 24 $f | tail -c 8 | od -An -tu1 | grep -q '^ *0 *0 *2 *118 '");
-    draw_and_check("--show warping --width 60", "d.svg", "grep -q 'width=\"60mm\"' $f");
+    draw_and_check("--show stress --component tau --case 'side gust' --width 60", "d.svg",
+                   "xmllint --noout $f && grep -q 'width=\"60mm\"' $f");
 }
 
 static void what_is_wrong_is_told(void **state)
@@ -68,6 +69,13 @@ static void what_is_wrong_is_told(void **state)
     expect_run("draw corner-bracket.json --width 16furlong -o a.svg", 2,
                "untwist: draw: --width 16furlong is not a length; give it as 160mm, 16cm or "
                "6.3in\n");
+    expect_run("draw corner-bracket.json --case gust -o a.svg", 2,
+               "untwist: draw: --case and --component are for --show stress\n");
+    expect_run("draw corner-bracket.json --show stress --component sigma -o a.svg", 2,
+               "untwist: draw: --component sigma: it must be von_mises, sigma_z, tau, tau_xz or "
+               "tau_yz\n");
+    expect_run("draw corner-bracket.json --show stress --case 'side gusts' -o a.svg", 3,
+               "untwist: there is no load case \"side gusts\"; did you mean \"side gust\"?\n");
     expect_run("draw corner-bracket.json -x a.svg", 2, "untwist: draw: unknown option '-x'");
     expect_run("draw corner-bracket.json -o", 2, "untwist: draw: --output needs a value");
     expect_run("draw corner-bracket.json -o /no/such/a.svg", 3,

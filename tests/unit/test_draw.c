@@ -11,7 +11,11 @@ static utw_solution *solution;
 static int solve(void **state)
 {
     (void)state;
-    outline = section_outline(0.3, "%s", "\"outline\": [[0,0],[60,0],[60,8],[8,8],[8,45],[0,45]]");
+    outline = utw_outline_of(
+        "{\"units\":\"mm "
+        "N\",\"materials\":{\"m\":{\"E\":1000,\"nu\":0.3}},\"parts\":[{\"material\":\"m\","
+        "\"outline\": [[0,0],[60,0],[60,8],[8,8],[8,45],[0,45]]}],"
+        "\"loads\":[{\"name\":\"a\",\"Vy\":-238.5,\"at\":[40,8]},{\"name\":\"b\",\"Mx\":2385}]}");
     solution = section_solve(outline, 1e-4, 0);
     return 0;
 }
@@ -57,6 +61,26 @@ static void every_kind_and_format_is_written(void **state)
     utw_draw_free(NULL);
 }
 
+static void every_stress_of_every_case_is_drawn(void **state)
+{
+    (void)state;
+    static const char *const cases[] = {"a", "b"};
+    for (int k = 0; k < UTW_STRESS_COMPONENT_COUNT; k++)
+        for (int c = 0; c < 2; c++) {
+            utw_error err;
+            utw_draw_options o = UTW_DRAW_OPTIONS_INIT;
+            unsigned char *bytes = NULL;
+            size_t n;
+            o.component = (utw_stress_component)k;
+            o.load_case = cases[c];
+            assert_ok(utw_draw_bytes(solution, UTW_PICTURE_STRESS, &o, UTW_SVG, &bytes, &n, &err));
+            assert_true(n > 2000);
+            utw_draw_free(bytes);
+            assert_non_null(utw_stress_component_key((utw_stress_component)k));
+        }
+    assert_null(utw_stress_component_key(UTW_STRESS_COMPONENT_COUNT));
+}
+
 static void files_are_written_whole_or_not(void **state)
 {
     (void)state;
@@ -98,6 +122,13 @@ static void wrong_use_is_told(void **state)
     o.dpi = 1e5;
     expect_argument(UTW_PICTURE_MESH, &o, "a.svg",
                     "drawing options: 100000 dots per inch is outside 20 .. 2400");
+    o = (utw_draw_options)UTW_DRAW_OPTIONS_INIT;
+    o.component = UTW_STRESS_COMPONENT_COUNT;
+    expect_argument(UTW_PICTURE_MESH, &o, "a.svg",
+                    "drawing options: component 5 is outside 0 .. 4");
+    o = (utw_draw_options)UTW_DRAW_OPTIONS_INIT;
+    o.load_case = "c";
+    assert_int_equal(utw_draw(solution, UTW_PICTURE_STRESS, &o, "a.svg", &err), UTW_E_LOAD);
     o = (utw_draw_options)UTW_DRAW_OPTIONS_INIT;
     o.version = 7;
     expect_argument(UTW_PICTURE_MESH, &o, "a.svg",
@@ -143,6 +174,7 @@ int main(void)
     const struct CMUnitTest tests[] = {
         cmocka_unit_test(kinds_have_keys),
         balanced_test(every_kind_and_format_is_written),
+        balanced_test(every_stress_of_every_case_is_drawn),
         balanced_test(files_are_written_whole_or_not),
         balanced_test(wrong_use_is_told),
         balanced_test(no_memory_is_told),

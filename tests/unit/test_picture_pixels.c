@@ -156,12 +156,48 @@ static void signs_are_those_of_the_axes(void **state)
     utw_outline_free(o);
 }
 
+/* sigma_z = Mx y / Ixx: with Mx > 0 tension, which is light, at the top; My > 0 compression, which
+ * is dark, at the right (src/untwist.h). */
+static void stresses_have_the_signs_of_the_axes(void **state)
+{
+    (void)state;
+    static const char *const load[] = {"Mx", "My"};
+    for (int k = 0; k < 2; k++) {
+        char text[400];
+        snprintf(text, sizeof text,
+                 "{\"units\":\"mm N\",\"materials\":{\"m\":{\"E\":1000,\"nu\":0.3}},\"parts\":[{"
+                 "\"material\":\"m\",\"outline\":[[3,7],[63,7],[63,47],[3,47]]}],"
+                 "\"loads\":[{\"name\":\"a\",\"%s\":2385}]}",
+                 load[k]);
+        utw_outline *o = utw_outline_of(text);
+        utw_solution *s = section_solve(o, 1e-4, 0);
+        utw_draw_options options = UTW_DRAW_OPTIONS_INIT;
+        options.component = UTW_SHOW_SIGMA_Z;
+        utw_canvas *canvas = picture_canvas(s, UTW_PICTURE_STRESS, &options);
+        pixels p = picture_pixels(canvas, 150);
+        const double start[2] = {0.4 * p.nx, 0.4 * p.ny};
+        int box[4];
+        drawing_box(&p, start, box);
+        const int x = (box[0] + box[1]) / 2, y = (box[2] + box[3]) / 2;
+        const int dx = k == 0 ? 0 : (box[1] - box[0]) * 2 / 5,
+                  dy = k == 0 ? (box[3] - box[2]) * 2 / 5 : 0;
+        /* up is y > 0: tension at the top, or at the left */
+        assert_true(picture_lightness(&p, x + 7 - dx, y - dy + 7) > 75);
+        assert_true(picture_lightness(&p, x + 7 + dx, y + dy + 7) < 45);
+        utw_free(p.rgb);
+        utw_canvas_free(canvas);
+        utw_solution_free(s);
+        utw_outline_free(o);
+    }
+}
+
 int main(void)
 {
     const struct CMUnitTest tests[] = {
         balanced_test(the_outline_lies_where_it_should),
         balanced_test(symmetric_sections_give_symmetric_pictures),
         balanced_test(signs_are_those_of_the_axes),
+        balanced_test(stresses_have_the_signs_of_the_axes),
     };
     return cmocka_run_group_tests(tests, NULL, NULL);
 }

@@ -7,20 +7,31 @@
 
 static const double widths[] = {60, 160, 420};
 
+static void check_one(const utw_solution *s, const char *name, utw_picture kind,
+                      utw_stress_component component, double width)
+{
+    utw_draw_options options = UTW_DRAW_OPTIONS_INIT;
+    char what[200];
+    options.width = width;
+    options.component = component;
+    snprintf(what, sizeof what, "%s, %s, %s, %g mm wide", name, utw_picture_key(kind),
+             utw_stress_component_key(component), width);
+    utw_canvas *canvas = picture_canvas(s, kind, &options);
+    picture_check_texts(canvas, what);
+    utw_canvas_free(canvas);
+}
+
+/* Every kind; stresses when there are load cases. */
 static void check_all(const utw_outline *outline, const char *name, size_t n_width)
 {
     utw_solution *s = section_solve(outline, 1e-4, 0);
-    for (int k = 0; k < UTW_PICTURE_COUNT; k++)
-        for (size_t w = 0; w < n_width; w++) {
-            utw_draw_options options = UTW_DRAW_OPTIONS_INIT;
-            char what[200];
-            options.width = widths[w];
-            snprintf(what, sizeof what, "%s, %s, %g mm wide", name, utw_picture_key((utw_picture)k),
-                     widths[w]);
-            utw_canvas *canvas = picture_canvas(s, (utw_picture)k, &options);
-            picture_check_texts(canvas, what);
-            utw_canvas_free(canvas);
-        }
+    const int loads = utw_outline_load_count(outline);
+    for (size_t w = 0; w < n_width; w++)
+        for (int k = 0; k < UTW_PICTURE_COUNT; k++)
+            if (k != UTW_PICTURE_STRESS || loads > 0)
+                check_one(s, name, (utw_picture)k, UTW_SHOW_VON_MISES, widths[w]);
+    for (int c = 1; c < UTW_STRESS_COMPONENT_COUNT && loads > 0; c++)
+        check_one(s, name, UTW_PICTURE_STRESS, (utw_stress_component)c, widths[0]);
     utw_solution_free(s);
 }
 
