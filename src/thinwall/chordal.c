@@ -214,7 +214,7 @@ static int step(const axis *x, int *tri, int k)
  * as bits; -1 when it is none. */
 static int other_side(unsigned bits, int back)
 {
-    if (count_bits(bits) != 2 || !(bits >> back & 1u)) return -1;
+    if (count_bits(bits) != 2 || !(bits >> back & 1)) return -1;
     bits &= ~(1u << back);
     return bits == 1 ? 0 : bits == 2 ? 1 : 2;
 }
@@ -237,10 +237,10 @@ static utw_status walk(axis *x, int start, int k)
     utw_status st = UTW_OK;
     if (count_bits(x->open[start]) == 1) k = go_out(x, &tri);
     while (st == UTW_OK && k >= 0) {
-        if (x->open[tri] >> k & 1u) x->seen[tri] |= (unsigned char)(1u << k);
+        if (x->open[tri] >> k & 1) x->seen[tri] |= (unsigned char)(1u << k);
         st = add_chord(x, tri, k);
         const int back = step(x, &tri, k);
-        if (x->open[tri] >> back & 1u) x->seen[tri] |= (unsigned char)(1u << back);
+        if (x->open[tri] >> back & 1) x->seen[tri] |= (unsigned char)(1u << back);
         b.to = x->junction[tri];
         k = b.to >= 0
                 ? -1
@@ -298,7 +298,7 @@ static utw_status find_branches(axis *x)
         for (int t = 0; t < x->n_tri; t++) {
             if (count_bits(x->open[t]) != order[pass]) continue;
             for (int k = 0; k < 3; k++) {
-                if (!(x->open[t] >> k & 1u) || (x->seen[t] >> k & 1u)) continue;
+                if (!(x->open[t] >> k & 1) || (x->seen[t] >> k & 1)) continue;
                 const utw_status st = walk(x, t, k);
                 if (st != UTW_OK) return st;
                 if (pass == 2) break;
