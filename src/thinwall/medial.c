@@ -115,8 +115,9 @@ static utw_status append(finder *x, row *list, const utw_station *s)
     return UTW_OK;
 }
 
-/* The circles at one point of a side; at a re-entrant corner one for each face, in the order of the
- * branch: the left boundary runs against it. */
+/* The circles at one point of a side; where two curves meet one for each, in the order of the
+ * branch: the left boundary runs against it. So a plate reaches to where its fillet begins, on
+ * whichever side of it that lies. */
 static utw_status at_point(finder *x, int i, int side, int point, row *list)
 {
     const utw_border *b = x->border;
@@ -124,7 +125,7 @@ static utw_status at_point(finder *x, int i, int side, int point, row *list)
     const double turn = b->curve[curve].turn;
     utw_station s;
     if (corner && turn > SMOOTH) return UTW_OK;
-    const int two = corner && turn < -SMOOTH;
+    const int two = corner && b->curve[curve].before != curve;
     for (int k = 0; k <= two; k++) {
         const int before = two && (k == 0) == (side == 1);
         const int on = before ? b->curve[curve].before : curve;

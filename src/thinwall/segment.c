@@ -21,6 +21,7 @@
 #define COVERED  0.7  /* of a stretch: what walls must cover of it at least */
 #define MORE     0.1  /* of a stretch: how much more of it is clearly more */
 #define MOST     0.8  /* of a wall that begins within a fillet is its plate, at least ... */
+#define EXACT    1e-6 /* errors over the thickness that are rounding */
 #define BETTER   0.25 /* ... which fits with this much of the errors, at most */
 #define REFIT                                                                                      \
     3.0 /* of the thickness: what is left over and longer is tried again, more loosely             \
@@ -38,6 +39,7 @@
 #define PARALLEL 0.1 /* slope of its thickness, at most */
 
 static const double FOLLOWS[] = {0.05, 0.1, 0.2, 0.35}, ROUGH[] = {0.02, 0.06, 0.18, 1.0};
+enum { MOST_RUNS = 4 /* taken off an end of a wall */ };
 enum { LEVELS = 3, LAST = 3 }; /* the last one is for branches in which nothing else was found */
 
 typedef struct cutter {
@@ -183,16 +185,22 @@ typedef struct merit {
 
 /* A wall that begins within a fillet, before its plate, begins at the plate when it fits much
  * better there. */
-static int plate_start(const cutter *c, int from, int end, int level, utw_wall_fit *fit)
+static int plate_start(const cutter *c, int from, int end, int level, int follows,
+                       utw_wall_fit *fit)
 {
-    utw_wall_fit trial;
-    const int way = end < from ? -1 : 1, next = run_end(c, from, end) + way;
-    if ((end - next) * way < 1 || !fits_between(c, next, end, level, &trial)) return from;
-    if (!is_wall(&trial, level) || trial.path.length < MOST * fit->path.length ||
-        trial.off + trial.rough > BETTER * (fit->off + fit->rough))
-        return from;
-    *fit = trial;
-    return next;
+    const int way = end < from ? -1 : 1;
+    if (fit->off + fit->rough <= EXACT * fit->mean) return from;
+    for (int runs = 0, next = from; runs < MOST_RUNS; runs++) {
+        utw_wall_fit trial;
+        next = run_end(c, next, end) + way;
+        if (follows && next != from + way) break;
+        if ((end - next) * way < 1 || !fits_between(c, next, end, level, &trial)) break;
+        if (!is_wall(&trial, level) || trial.path.length < MOST * fit->path.length) break;
+        if (trial.off + trial.rough > BETTER * (fit->off + fit->rough)) continue;
+        *fit = trial;
+        return next;
+    }
+    return from;
 }
 
 /* Walls from one station to the next, from `from` toward `to`, as far as they reach. */
@@ -202,9 +210,10 @@ static utw_status cut_greedily(cutter *c, int from, int to, int level, merit *m)
     *m = (merit){0, 0, 0};
     for (int i = from, last = from; i != to;) {
         utw_wall_fit fit;
-        const int end = reach(c, i, to, level, &fit);
+        int end = reach(c, i, to, level, &fit);
         if (end != i && is_wall(&fit, level)) {
-            const int begin = m->pieces > 0 && i == last ? i : plate_start(c, i, end, level, &fit);
+            const int begin = plate_start(c, i, end, level, m->pieces > 0 && i == last, &fit);
+            end = plate_start(c, end, begin, level, 0, &fit);
             const utw_status st = keep(c, &fit, begin, end);
             if (st != UTW_OK) return st;
             last = end;

@@ -200,13 +200,42 @@ static void areas(void **state)
     utw_outline_free(channel);
 }
 
+/* A bulb is one thick part at the end of its plate, which reaches to where the fillet begins
+ * however densely the boundary is sampled. */
+static void thick_end(void **state)
+{
+    (void)state;
+    double length[2], area[2];
+    utw_outline *bulb = shape_of("bulb b=200 t=10 c=28 r=8");
+    for (int k = 0; k < 2; k++) {
+        utw_error err;
+        utw_idealisation *ideal = NULL;
+        assert_ok(utw_idealise_with(bulb, 1 + k, &ideal, &err));
+        const utw_idealisation_info *info = utw_idealisation_get(ideal);
+        assert_int_equal(info->walls, 2);
+        assert_int_equal(info->lumps, 1);
+        assert_close_scaled(info->area_error, 0, 1e-3, 1);
+        length[k] = area[k] = 0;
+        for (int i = 0; i < 2; i++) {
+            const utw_wall_info *w = utw_idealisation_wall(ideal, i);
+            if (w->kind == UTW_WALL_LUMP)
+                area[k] = w->length * w->thickness;
+            else
+                length[k] = w->length;
+        }
+        utw_idealisation_free(ideal);
+    }
+    assert_close(length[0], length[1], 1e-9);
+    assert_close(area[0], area[1], 2e-3);
+    utw_outline_free(bulb);
+}
+
 int main(void)
 {
     const struct CMUnitTest tests[] = {
-        balanced_test(twelve_drawings),
-        balanced_test(a_given_midline_is_taken),
-        balanced_test(trade_shapes),
-        balanced_test(areas),
+        balanced_test(twelve_drawings), balanced_test(a_given_midline_is_taken),
+        balanced_test(trade_shapes),    balanced_test(areas),
+        balanced_test(thick_end),
     };
     return cmocka_run_group_tests(tests, NULL, NULL);
 }
