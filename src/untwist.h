@@ -745,6 +745,13 @@ UTW_API UTW_CHECK utw_status utw_report_comparison(const utw_report *report, cha
 UTW_API UTW_CHECK utw_status utw_midline_file(const utw_midline *midline, const char *name, const char *units,
                                               char **text, utw_error *err);
 
+/** The solution for general-purpose viewers: a VTK XML unstructured grid (.vtu) of Lagrange triangles of the elements'
+ *  orders on the curved section, values as appended binary. Point data: omega about the shear centre [L^2], phi [L^2],
+ *  the shear stress vectors of unit forces, and of each load case with a result sigma_z, the vector tau, von_mises.
+ *  Neighbouring elements do not share points: stresses may jump there. [in] path, borrowed; an existing file is
+ *  replaced. UTW_E_ARGUMENT, UTW_E_FILE, UTW_E_NOMEM. */
+UTW_API UTW_CHECK utw_status utw_report_vtu(const utw_report *report, const char *path, utw_error *err);
+
 /** Free a report; NULL is allowed. */
 UTW_API void utw_report_free(char *text);
 

@@ -10,6 +10,11 @@ static int check_files(const cli_call *call)
 {
     int status = cli_check_overwrite(call, "json");
     if (status == CLI_DONE) status = cli_check_overwrite(call, "csv");
+    if (status == CLI_DONE) status = cli_check_overwrite(call, "vtu");
+    if (status == CLI_DONE && cli_to_output(call, "vtu")) {
+        cli_message("solve: --vtu needs a file; it is not text for standard output");
+        return CLI_USAGE;
+    }
     if (status != CLI_DONE || !cli_to_output(call, "json") || !cli_to_output(call, "csv"))
         return status;
     cli_message("solve: --json and --csv cannot both go to standard output");
@@ -24,6 +29,10 @@ static int write_reports(const cli_call *call, const utw_report *report)
     int status = CLI_DONE;
     if (json != NULL) status = cli_write_report(utw_report_json, report, json);
     if (status == CLI_DONE && csv != NULL) status = cli_write_report(utw_report_csv, report, csv);
+    if (status == CLI_DONE && cli_text(call, "vtu") != NULL) {
+        utw_error err;
+        if (utw_report_vtu(report, cli_text(call, "vtu"), &err) != UTW_OK) status = cli_fail(&err);
+    }
     if (status == CLI_DONE && table) status = cli_write_report(utw_report_text, report, "-");
     return status;
 }
@@ -53,6 +62,9 @@ static const cli_option options[] = {
     {"json", "FILE",
      "Write all results as JSON to FILE; '-' is standard output, without the table.", CLI_TEXT, 0,
      0, 0},
+    {"vtu", "FILE",
+     "Write the fields of the section for general-purpose viewers: a VTK XML unstructured grid.",
+     CLI_TEXT, 0, 0, 0},
     {"quiet", NULL, "Print no table.", CLI_FLAG, 0, 0, 0},
 };
 

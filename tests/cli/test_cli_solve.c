@@ -142,6 +142,10 @@ static void wrong_cases_and_probes_are_told(void **state)
                "1 away\n");
     expect_run("solve a.json --json - --csv -", 2,
                "untwist: solve: --json and --csv cannot both go to standard output\n");
+    expect_run("solve corner-bracket.json --vtu -", 2,
+               "untwist: solve: --vtu needs a file; it is not text for standard output\n");
+    expect_run("solve corner-bracket.json --quiet --vtu /no/such/a.vtu", 3,
+               "untwist: /no/such/a.vtu: cannot be written: No such file or directory\n");
     expect_run("solve corner-bracket.json --csv corner-bracket.json", 2,
                "untwist: solve: --csv corner-bracket.json would overwrite the section file\n");
     static const char square[] = "{\"units\": \"mm N\", \"parts\": [{\"outline\": "
