@@ -467,6 +467,141 @@ UTW_API UTW_CHECK utw_status utw_cases_probe(const utw_cases *cases, int k, int 
 UTW_API UTW_CHECK utw_status utw_cases_envelope(const utw_cases *cases, utw_stress_envelope *envelope,
                                                 utw_error *err);
 
+/* ---- the push ------------------------------------------------------------------------------------ */
+
+/** What holds the bar, from z = 0 to z = length. A fixed end holds deflection, rotation and twist; a fork holds
+ *  deflection and twist and lets the section rotate. */
+typedef enum utw_support {
+    UTW_FIXED_FREE = 0, /* a cantilever */
+    UTW_FIXED_FIXED,
+    UTW_FORKED, /* a fork at each end */
+    UTW_FIXED_FORKED,
+    UTW_SUPPORT_COUNT
+} utw_support;
+
+/** Whether the supports hold the warping of the section. Free ends never do. */
+typedef enum utw_hold_warping {
+    UTW_WARPING_USUAL = 0, /* fixed ends hold it, forks do not */
+    UTW_WARPING_FREE,      /* nowhere */
+    UTW_WARPING_HELD       /* at every support, and whatever the section: see `uniform_torsion` below */
+} utw_hold_warping;
+
+/** Where along the bar the force acts. */
+typedef enum utw_along_bar {
+    UTW_WHERE_USUAL = 0, /* at the tip of a cantilever, else in the middle */
+    UTW_AT_TIP,          /* z = length */
+    UTW_AT_MID,          /* z = length/2 */
+    UTW_AT_Z,            /* at the given z */
+    UTW_UNIFORM          /* spread evenly over the length; `force` is its sum */
+} utw_along_bar;
+
+/** A bar and the transverse load on it. Start from UTW_PUSH_INIT and set at least `length`. */
+typedef struct utw_push_load {
+    int version;     /* 1 */
+    double length;   /* [L] > 0 */
+    double force[2]; /* Fx, Fy [F]; not both zero. UTW_PUSH_INIT: one unit of force downward */
+    int has_at;      /* 0: at the shear centre; 1: at the place below */
+    double at[2];    /* in the drawing's coordinates; it need not lie in the section: a bracket will do [L] */
+    utw_support support;
+    utw_hold_warping warping;
+    utw_along_bar where;
+    double z;            /* with UTW_AT_Z [L] */
+    double twist_limit;  /* greatest twist allowed [rad]; 0: none is set */
+    double stress_limit; /* greatest von Mises stress allowed [F/L^2]; 0: the least yield stress of the parts, when
+                            each has one */
+} utw_push_load;
+
+#define UTW_PUSH_INIT                                                                                                  \
+    {1, 0.0, {0.0, -1.0}, 0, {0.0, 0.0}, UTW_FIXED_FREE, UTW_WARPING_USUAL, UTW_WHERE_USUAL, 0.0, 0.0, 0.0}
+
+/** The bar at a station. */
+typedef struct utw_push_state {
+    double z;
+    double u[2];           /* deflection of the shear centre [L] */
+    double slope[2];       /* du/dz, with the shear strain [1] */
+    double twist, twist1;  /* turns x toward y [rad]; by z [rad/L] */
+    utw_forces forces;     /* resultants, for utw_stress_at(): T is the part of the torque in uniform torsion */
+    double torque;         /* all of it [F L] */
+    double warping_torque; /* the rest: -dB/dz [F L]. Its shear stress is not in the stresses */
+} utw_push_state;
+
+/** Between which places the load may act for something to stay within its limit. Places are told by their offset from
+ *  the shear centre along `across`; along the line of the force the place does not matter. */
+typedef struct utw_load_window {
+    int limited;            /* 0: no limit was set, and the rest is zero */
+    double limit;           /* [rad] or [F/L^2] */
+    int empty;              /* 1: there is no such place, and from, to are NAN */
+    double from, to, error; /* offsets, from <= to, and about how far each may be off [L] */
+    double at_from[2], at_to[2]; /* these places on the line through the shear centre [L] */
+    int holds;              /* 1: the load, where it acts, is within */
+} utw_load_window;
+
+/** What the push does. */
+typedef struct utw_push_result {
+    double E, G;               /* [F/L^2] */
+    double z;                  /* where the force acts; NAN when it is spread [L] */
+    int warping_held[2];       /* at z = 0 and z = length */
+    double fade;               /* sqrt(E Iw / (G J)): the effect of held warping falls to 1/e over this [L] */
+    int uniform_torsion;       /* 1: it fades within a fifth of the section's size, where no theory of bars holds: most
+                                  solid sections and closed tubes. Saint-Venant's torsion is taken all along and there
+                                  is no bimoment, unless UTW_WARPING_HELD asks for it */
+    double size;               /* diagonal of the section's box [L] */
+    double shear_centre[2];    /* a load through it does not twist the bar [L] */
+    double shear_centre_error; /* half the width of its bracket along `across` [L] */
+    double across[2];          /* unit vector at right angles to the force, along which offsets are measured: of the two
+                                  the one that points more to the right; for a horizontal force up */
+    double section[2];         /* between these offsets the section lies [L] */
+    double offset;             /* of the load [L] */
+    utw_quantity twist_per_offset; /* greatest twist along the bar over the offset of the load [rad/L]. Twist is
+                                      linear in the place: this is the whole line; it is zero at the shear centre */
+    double z_twist;             /* where along the bar it is greatest [L] */
+    utw_quantity twist;         /* greatest twist, with its sign [rad] */
+    utw_quantity deflection[2]; /* of the shear centre along x and y, where it is greatest [L] */
+    double z_deflection;
+    double load_moves[2];      /* displacement of the place the load acts at, twist included; of a spread load where
+                                  the deflection is greatest [L] */
+    utw_push_state start, end; /* at z = 0 and z = length: with the resultants on the sections of the supports */
+    int has_stress;            /* 0: no stresses were given, and the rest but twist_window is zero */
+    utw_stress_peak von_mises; /* greatest anywhere in the bar */
+    double z_von_mises;
+    int unbounded; /* 1: outside the circles around sharp re-entrant corners only, as in utw_stress_peaks */
+    double margin; /* least yield stress over it, minus 1; NAN without one */
+    utw_load_window twist_window, stress_window;
+    utw_load_window window; /* what both leave; its `limit` is zero */
+} utw_push_result;
+
+/** A bar under a transverse load. */
+typedef struct utw_push utw_push;
+
+/** Compute it. [in] solution and stress (of this solution; NULL: no stresses, no stress window) are borrowed and must
+ *  outlive the push; load, borrowed. [out] *push, returned owned: utw_push_free().
+ *  Bending about both principal axes with shear, and restrained torsion E Iw theta'''' - G J theta'' = m, in closed
+ *  form; they do not couple when forces are taken to the shear centre (Trefftz 1935). Methods: docs/push.md.
+ *  UTW_E_ARGUMENT; UTW_E_MATERIAL when the parts have not one E and nu; UTW_E_LOAD: a length, force, place or limit
+ *  that is impossible, a load on a support; UTW_E_NOMEM. */
+UTW_API UTW_CHECK utw_status utw_push_create(const utw_solution *solution, const utw_stress *stress,
+                                             const utw_push_load *load, utw_push **push, utw_error *err);
+
+/** Free it; NULL is allowed. */
+UTW_API void utw_push_free(utw_push *push);
+
+/** The result, returned borrowed. */
+UTW_API const utw_push_result *utw_push_get(const utw_push *push);
+
+/** The load it was made with, returned borrowed. */
+UTW_API const utw_push_load *utw_push_get_load(const utw_push *push);
+
+/** The bar at 0 <= z <= length (clamped). At the force itself what jumps is as on its left. [out] *state. */
+UTW_API void utw_push_at(const utw_push *push, double z, utw_push_state *state);
+
+/** Greatest twist along the bar when the same load acts at another place [rad]. [in] at[2], drawing's coordinates. */
+UTW_API double utw_push_twist_of(const utw_push *push, const double at[2]);
+
+/** Greatest von Mises stress anywhere in the bar when the same load acts at another place. [out] *peak; *z, may be
+ *  NULL. UTW_E_ARGUMENT, also when the push was made without stresses; UTW_E_NOMEM. */
+UTW_API UTW_CHECK utw_status utw_push_stress_of(const utw_push *push, const double at[2], utw_stress_peak *peak,
+                                                double *z, utw_error *err);
+
 /* ---- thin-walled theory -------------------------------------------------------------------------- */
 
 /** What the thin-walled theory says of a midline: area on the midline, no thickness terms in the second
@@ -716,9 +851,10 @@ typedef struct utw_report {
     const utw_cases *cases;       /* borrowed: load cases and probes of this solution */
     const utw_comparison *comparison; /* borrowed: of this solution; in the JSON and in utw_report_comparison() */
     const utw_study *study;           /* borrowed: beside a comparison */
+    const utw_push *push;         /* borrowed: a push of this solution */
 } utw_report;
 
-#define UTW_REPORT_INIT {1, NULL, NULL, NULL, NULL}
+#define UTW_REPORT_INIT {1, NULL, NULL, NULL, NULL, NULL}
 
 /** A table for people: the constants with their bounds, trust and units, what is left out and why, what
  *  the solution took. Plain text of at most 100 columns at usual tolerances. Angles are in degrees.
@@ -751,6 +887,10 @@ UTW_API UTW_CHECK utw_status utw_midline_file(const utw_midline *midline, const 
  *  Neighbouring elements do not share points: stresses may jump there. [in] path, borrowed; an existing file is
  *  replaced. UTW_E_ARGUMENT, UTW_E_FILE, UTW_E_NOMEM. */
 UTW_API UTW_CHECK utw_status utw_report_vtu(const utw_report *report, const char *path, utw_error *err);
+
+/** The push of the report for people: deflection, twist, the sections at the ends, the worst stress, the load window,
+ *  with notes. Text as of utw_report_text(). UTW_E_ARGUMENT (report->push is needed), UTW_E_NOMEM. */
+UTW_API UTW_CHECK utw_status utw_report_push(const utw_report *report, char **text, utw_error *err);
 
 /** Free a report; NULL is allowed. */
 UTW_API void utw_report_free(char *text);

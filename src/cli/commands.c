@@ -8,6 +8,7 @@
 const cli_command *const cli_command_list[CLI_N_COMMAND] = {
     &cli_solve,
     &cli_compare,
+    &cli_push,
     &cli_draw,
     &cli_shape,
     &cli_help,

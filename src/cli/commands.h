@@ -9,11 +9,12 @@
 extern const cli_command cli_compare; /* compare.c */
 extern const cli_command cli_draw;    /* draw.c */
 extern const cli_command cli_help;    /* help.c */
+extern const cli_command cli_push;    /* push.c */
 extern const cli_command cli_shape;   /* shape.c */
 extern const cli_command cli_solve;   /* solve.c */
 
 /** All of them, in the order help lists them. */
-enum { CLI_N_COMMAND = 5 };
+enum { CLI_N_COMMAND = 6 };
 extern const cli_command *const cli_command_list[CLI_N_COMMAND];
 
 /** The command of that name, or NULL. Returned borrowed. */

@@ -18,6 +18,11 @@ static int number(const char *text, const char *end, double *value)
     return length > 0 && stop == end && isfinite(*value);
 }
 
+int cli_read_decimal(const char *text, double *value)
+{
+    return number(text, text + strlen(text), value);
+}
+
 int cli_read_point(const cli_call *call, const char *option, const char *text, double xy[2])
 {
     const char *comma = strchr(text, ',');

@@ -67,8 +67,8 @@ static void add_dimensions(utw_json_writer *w, cJSON *root)
 
 /* The members of the document, in its order. A further kind of result is one more line. */
 static void (*const members[])(utw_json_writer *, cJSON *) = {
-    add_heading,  add_dimensions,     add_constants,
-    add_solution, utw_json_add_cases, utw_json_add_comparison};
+    add_heading,        add_dimensions,          add_constants,    add_solution,
+    utw_json_add_cases, utw_json_add_comparison, utw_json_add_push};
 
 utw_status utw_report_json(const utw_report *report, char **text, utw_error *err)
 {

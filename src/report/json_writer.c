@@ -79,6 +79,11 @@ void utw_json_append_number(utw_json_writer *w, cJSON *array, double x)
     append(w, array, number(x));
 }
 
+void utw_json_append_flag(utw_json_writer *w, cJSON *array, int value)
+{
+    append(w, array, cJSON_CreateBool(value));
+}
+
 void utw_json_add_point(utw_json_writer *w, cJSON *to, const char *key, const double xy[2])
 {
     cJSON *point = utw_json_kept(w, cJSON_CreateArray());

@@ -24,8 +24,9 @@ cJSON *utw_json_add_array(utw_json_writer *writer, cJSON *to, const char *key);
 /** Add a new empty object to an array. */
 cJSON *utw_json_append_object(utw_json_writer *writer, cJSON *array);
 
-/** Add a number to an array. */
+/** Add a number, a truth value to an array. */
 void utw_json_append_number(utw_json_writer *writer, cJSON *array, double x);
+void utw_json_append_flag(utw_json_writer *writer, cJSON *array, int value);
 
 /** Add an item, which is taken. */
 void utw_json_add_item(utw_json_writer *writer, cJSON *to, const char *key, cJSON *item);
@@ -42,5 +43,6 @@ void utw_json_add_point(utw_json_writer *writer, cJSON *to, const char *key, con
 /** Members of the document, one function a kind of result; [in,out] root. */
 void utw_json_add_cases(utw_json_writer *writer, cJSON *root);
 void utw_json_add_comparison(utw_json_writer *writer, cJSON *root);
+void utw_json_add_push(utw_json_writer *writer, cJSON *root);
 
 #endif

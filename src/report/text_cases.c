@@ -182,32 +182,36 @@ static void add_point(utw_text *words, const double at[2])
     utw_text_add(words, "(%s, %s)", x, y);
 }
 
-/* Which corners have no bound, and what is reported instead. */
-static void write_corners(const listing *l)
+void utw_report_corners(const utw_stress *stress, utw_text *words)
 {
     enum { MOST = 8 };
-    const utw_stress *stress = l->cases->stress;
     const int n = utw_stress_corner_count(stress);
-    int any = 0;
-    for (int i = 0; i < l->cases->n; i++)
-        any |= l->cases->list[i].status == UTW_OK && l->cases->list[i].peaks.unbounded;
-    if (!any) return;
-    utw_text words = {.text = NULL};
-    utw_text_add(&words, "* The shear stress has no bound at the sharp re-entrant corner%s ",
+    utw_text_add(words, "* The shear stress has no bound at the sharp re-entrant corner%s ",
                  n == 1 ? "" : "s");
     for (int k = 0; k < n && k < MOST; k++) {
         double at[2] = {0, 0}, radius;
         utw_error err;
         if (utw_stress_corner(stress, k, at, &radius, &err) != UTW_OK) break;
-        utw_text_add(&words, "%s", k == 0 ? "" : k == n - 1 ? " and " : ", ");
-        add_point(&words, at);
+        utw_text_add(words, "%s", k == 0 ? "" : k == n - 1 ? " and " : ", ");
+        add_point(words, at);
     }
-    if (n > MOST) utw_text_add(&words, " and %d more", n - MOST);
-    utw_text_add(&words,
+    if (n > MOST) utw_text_add(words, " and %d more", n - MOST);
+    utw_text_add(words,
                  ". Given are the greatest stresses outside a circle of %g of the local wall "
                  "around each. Draw the corners with their real radius (\"round\") to see "
                  "the stress in them.",
                  UTW_KEEP_OUT);
+}
+
+/* Which corners have no bound, and what is reported instead. */
+static void write_corners(const listing *l)
+{
+    int any = 0;
+    for (int i = 0; i < l->cases->n; i++)
+        any |= l->cases->list[i].status == UTW_OK && l->cases->list[i].peaks.unbounded;
+    if (!any) return;
+    utw_text words = {.text = NULL};
+    utw_report_corners(l->cases->stress, &words);
     write_note(l, "Corners", &words);
 }
 

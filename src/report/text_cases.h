@@ -13,4 +13,7 @@ void utw_report_text_cases(const utw_report *report, utw_text *text);
 /** The notes below: cases left out, corners without bound, what the errors mean. */
 void utw_report_note_cases(const utw_report *report, utw_text *text);
 
+/** Where stresses have no bound, and what is given instead, in words. */
+void utw_report_corners(const utw_stress *stress, utw_text *words);
+
 #endif

@@ -155,6 +155,30 @@ static utw_interval shear_flexibility(const moments *g, const utw_measures *m, u
                     utw_plus(utw_times(mu * mu, chi), utw_times(-mu * mu, twist)));
 }
 
+utw_quantity utw_shear_coupling(const utw_area *area, double scale, const utw_solved *solved,
+                                double nu)
+{
+    const utw_measures *m = &solved->now;
+    const moments g = scaled_moments(area, scale);
+    const double mu = nu / (2 * (1 + nu));
+    const combination torsion = {[UTW_TORSION] = 1};
+    combination z[2] = {{0}, {0}}, anti[2] = {{0}, {0}};
+    for (int axis = 0; axis < 2; axis++) {
+        double a, b;
+        unit_shear(&g, axis, &a, &b);
+        z[axis][UTW_SHEAR_X] = anti[axis][UTW_ANTI_X] = a;
+        z[axis][UTW_SHEAR_Y] = anti[axis][UTW_ANTI_Y] = b;
+    }
+    const utw_interval TT = utw_product(anticlastic_torque(&g, m, 0), anticlastic_torque(&g, m, 1));
+    const utw_interval twist = utw_product(TT, utw_inverse(stress_of(m, torsion, torsion)));
+    const utw_interval chi = stress_of(m, anti[0], anti[1]);
+    const utw_interval c =
+        utw_times(1 / (scale * scale),
+                  utw_plus(energy_of(m, z[0], z[1]),
+                           utw_plus(utw_times(mu * mu, chi), utw_times(-mu * mu, twist))));
+    return (utw_quantity){c.value, c.low, c.high, UTW_BRACKET};
+}
+
 static double warping_constant(const moments *g, const utw_measures *m)
 {
     utw_interval s[2];

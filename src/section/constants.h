@@ -22,4 +22,10 @@ void utw_constants_of_area(const utw_area *area, utw_constant_value *value);
 void utw_constants_of_solution(const utw_area *area, double scale, const utw_solved *solved,
                                double nu, utw_constant_value *value);
 
+/** int tau_x . tau_y dA [1/L^2] of the stresses of Vx = 1 and of Vy = 1, each through the shear
+ * centre: what couples the shear strains of the two, as 1/Asx and 1/Asy are int |tau_x|^2 and int
+ * |tau_y|^2. Arguments as above; nu must be a number. */
+utw_quantity utw_shear_coupling(const utw_area *area, double scale, const utw_solved *solved,
+                                double nu);
+
 #endif

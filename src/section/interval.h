@@ -30,6 +30,13 @@ static inline utw_interval utw_times(double k, utw_interval a)
                   : (utw_interval){k * a.value, k * a.high, k * a.low};
 }
 
+static inline utw_interval utw_product(utw_interval a, utw_interval b)
+{
+    const double ll = a.low * b.low, lh = a.low * b.high, hl = a.high * b.low, hh = a.high * b.high;
+    return (utw_interval){a.value * b.value, fmin(fmin(ll, lh), fmin(hl, hh)),
+                          fmax(fmax(ll, lh), fmax(hl, hh))};
+}
+
 static inline utw_interval utw_square(utw_interval a)
 {
     const double l = a.low * a.low, h = a.high * a.high;
