@@ -455,6 +455,7 @@ utw_status utw_field_solve(const utw_setting *setting, const unsigned char *orde
         f->times.analyse += a;
         f->times.factorise += b;
         f->times.solve += c;
+        utw_system_release(s.system[which]);
     }
     mark = utw_seconds();
     UTW_TRY(collect(&s, err));

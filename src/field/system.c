@@ -24,18 +24,24 @@ struct utw_system {
     double seconds[3];
 };
 
-void utw_system_free(utw_system *s)
+void utw_system_release(utw_system *s)
 {
-    if (s == NULL) return;
     cholmod_free_sparse(&s->A, &s->common);
     cholmod_free_factor(&s->L, &s->common);
-    cholmod_finish(&s->common);
-    utw_free(s->size);
-    utw_free(s->offset);
     utw_free(s->rank);
     utw_free(s->first);
     utw_free(s->later);
     utw_free(s->row_at);
+    s->rank = s->first = s->later = s->row_at = NULL;
+}
+
+void utw_system_free(utw_system *s)
+{
+    if (s == NULL) return;
+    utw_system_release(s);
+    cholmod_finish(&s->common);
+    utw_free(s->size);
+    utw_free(s->offset);
     utw_free(s);
 }
 

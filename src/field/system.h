@@ -32,6 +32,10 @@ utw_status utw_system_factorise(utw_system *system, utw_error *err);
 /** Solve for n_rhs right-hand sides in place: b[n_rhs][size]. UTW_E_NOMEM, UTW_E_SINGULAR. */
 utw_status utw_system_solve(const utw_system *system, int n_rhs, double *b, utw_error *err);
 
+/** Give back the matrix and its factor; size and offsets stay. Nothing can be added, factorised or
+ * solved afterwards. */
+void utw_system_release(utw_system *system);
+
 /** Seconds spent on ordering and analysis, factorising, solving (wall clock), for benchmarks. */
 void utw_system_seconds(const utw_system *system, double *analyse, double *factorise,
                         double *solve);

@@ -18,6 +18,10 @@ enum { MOST_TRIES = 6, MOST_PASSES = 3 };
 /* Determinant over that of the straight triangle below which the curved sides of an element are
  * halved. */
 #define GOOD_QUALITY 0.3
+/* Inside, sizes grow by this much per length of distance from the boundary. With 1 a fillet of a
+ * thousandth of the wall took 40 times as many unknowns for 1e-6, with less than this elements are
+ * only added. */
+#define GROWTH 0.7
 
 /* Halve the side opposite to every flat corner: the new side from the middle then divides the
  * corner. */
@@ -89,7 +93,7 @@ static utw_status try_once(const utw_net *net, double scale, double target, utw_
     utw_division *division = NULL;
     utw_mesh *m = NULL;
     UTW_TRY(utw_division_create(net, scale, &division, err));
-    UTW_TRY(utw_mesh_triangulate(net, division, &m, err));
+    UTW_TRY(utw_mesh_triangulate(net, division, GROWTH * fmin(scale, 1), &m, err));
     UTW_TRY(divide_flat_corners(m, err));
     UTW_TRY(straighten(m, err));
     UTW_TRY(utw_mesh_add_layers(m, target, err));

@@ -15,8 +15,9 @@ typedef struct range {
 
 struct utw_sizes {
     int n;
+    double growth;
     double (*xy)[2], *size; /* [n] as given: neighbours on the boundary are near in the plane */
-    range *tree; /* [2 n - 1], preorder: a range of k points has 2k - 1 nodes */
+    range *tree;            /* [2 n - 1], preorder: a range of k points has 2k - 1 nodes */
 };
 
 static void build(utw_sizes *s, int node, int i, int j)
@@ -38,8 +39,8 @@ static void build(utw_sizes *s, int node, int i, int j)
     r->least = fmin(a->least, b->least);
 }
 
-utw_status utw_sizes_create(int n, const double (*xy)[2], const double *size, utw_sizes **sizes,
-                            utw_error *err)
+utw_status utw_sizes_create(int n, const double (*xy)[2], const double *size, double growth,
+                            utw_sizes **sizes, utw_error *err)
 {
     utw_status st = UTW_E_INTERNAL;
     utw_sizes *s;
@@ -50,6 +51,7 @@ utw_status utw_sizes_create(int n, const double (*xy)[2], const double *size, ut
     memcpy(s->xy, xy, (size_t)n * sizeof *xy);
     memcpy(s->size, size, (size_t)n * sizeof *size);
     s->n = n;
+    s->growth = growth;
     build(s, 0, 0, n);
     *sizes = s;
     s = NULL;
@@ -69,21 +71,22 @@ void utw_sizes_free(utw_sizes *sizes)
 }
 
 /* No point of the range can give less than this. */
-static double bound(const range *r, const double p[2])
+static double bound(const utw_sizes *s, int node, const double p[2])
 {
+    const range *r = &s->tree[node];
     double d[2];
     for (int k = 0; k < 2; k++) d[k] = fmax(0, fmax(r->lo[k] - p[k], p[k] - r->hi[k]));
-    return r->least + UTW_SIZE_GROWTH * utw_norm(d);
+    return r->least + s->growth * utw_norm(d);
 }
 
 static void descend(const utw_sizes *s, int node, int i, int j, const double p[2], double *best)
 {
     if (j - i == 1) {
-        *best = fmin(*best, bound(&s->tree[node], p));
+        *best = fmin(*best, bound(s, node, p));
         return;
     }
     const int m = (i + j) / 2, second = node + 2 * (m - i);
-    const double a = bound(&s->tree[node + 1], p), b = bound(&s->tree[second], p);
+    const double a = bound(s, node + 1, p), b = bound(s, second, p);
     /* the more promising half first, so that the other one is more often left out */
     if (a <= b && a < *best) descend(s, node + 1, i, m, p, best);
     if (b < *best) descend(s, second, m, j, p, best);

@@ -24,6 +24,7 @@ typedef struct boundary {
     const utw_division *division;
     int n_point, n_chord;
     double (*xy)[2], *size;
+    double growth; /* of the size inside */
     chord *chord;
     int *first_chord; /* [n_edge + 1] */
     int *first_line;  /* [n_edge + 1] Gmsh's lines of every edge */
@@ -243,8 +244,8 @@ static utw_status generate(boundary *b, utw_error *err)
     utw_status st = UTW_E_INTERNAL;
     int ierr = 0;
     utw_sizes *sizes = NULL;
-    UTW_TRY(utw_sizes_create(b->n_point, (const double(*)[2])b->xy, b->size, &sizes, err));
-    gmshModelAdd("section", &ierr);
+    UTW_TRY(
+        utw_sizes_create(b->n_point, (const double(*)[2])b->xy, b->size, b->growth, &sizes, err));
     UTW_TRY(give_lines(b, err));
     UTW_TRY(give_parts(b, err));
     gmshModelGeoSynchronize(&ierr);
@@ -398,36 +399,66 @@ done:
     return st;
 }
 
-utw_status utw_mesh_triangulate(const utw_net *net, const utw_division *division, utw_mesh **mesh,
-                                utw_error *err)
+/* Gmsh 4.8 loses memory with every start and stop, more each time (20 kB a round after a thousand),
+ * so it is started once and left running; its state is global in any case. */
+static utw_status start_gmsh(utw_error *err)
+{
+    static int started;
+    int ierr = 0;
+    if (started) return UTW_OK;
+    gmshInitialize(0, NULL, 0, &ierr);
+    if (ierr) return gmsh_failed(err, "start");
+    started = 1;
+    return UTW_OK;
+}
+
+/* Set anew each time: the program around the library may use Gmsh as well. */
+static utw_status set_options(utw_error *err)
+{
+    static const struct {
+        const char *name;
+        double value;
+    } option[] = {
+        {"General.Terminal", 0},
+        {"General.AbortOnError", 0},
+        {"General.Verbosity", 0},
+        {"Mesh.Algorithm", 5}, /* Delaunay: the frontal one leaves fans of needles where sizes grow
+                                  fast */
+        {"Mesh.MeshSizeExtendFromBoundary", 0},
+        {"Mesh.MeshSizeFromPoints", 0},
+        {"Mesh.MaxNumThreads2D", 1},
+        {"Mesh.MeshOnlyEmpty", 1}, /* the lines are meshed already */
+        {"Mesh.Smoothing", 0},
+        {"Mesh.Renumber", 0}, /* boundary nodes are found again by their tags */
+        {"Mesh.RandomSeed", 1},
+    };
+    for (size_t i = 0; i < sizeof option / sizeof *option; i++) {
+        int ierr = 0;
+        gmshOptionSetNumber(option[i].name, option[i].value, &ierr);
+        if (ierr) return gmsh_failed(err, "take its options");
+    }
+    return UTW_OK;
+}
+
+utw_status utw_mesh_triangulate(const utw_net *net, const utw_division *division, double growth,
+                                utw_mesh **mesh, utw_error *err)
 {
     utw_status st = UTW_E_INTERNAL;
-    int ierr = 0, started = 0;
-    boundary b = {.net = net, .division = division};
+    int ierr = 0, added = 0;
+    boundary b = {.net = net, .division = division, .growth = growth};
     UTW_TRY(boundary_fill(&b, err));
-    gmshInitialize(0, NULL, 0, &ierr);
-    if (ierr) {
-        st = gmsh_failed(err, "start");
-        goto done;
-    }
-    started = 1;
-    gmshOptionSetNumber("General.Terminal", 0, &ierr);
-    gmshOptionSetNumber("General.AbortOnError", 0, &ierr);
-    gmshOptionSetNumber("General.Verbosity", 0, &ierr);
-    /* Delaunay: the frontal one leaves fans of needles where sizes grow fast */
-    gmshOptionSetNumber("Mesh.Algorithm", 5, &ierr);
-    gmshOptionSetNumber("Mesh.MeshSizeExtendFromBoundary", 0, &ierr);
-    gmshOptionSetNumber("Mesh.MeshSizeFromPoints", 0, &ierr);
-    gmshOptionSetNumber("Mesh.MaxNumThreads2D", 1, &ierr);
-    gmshOptionSetNumber("Mesh.MeshOnlyEmpty", 1, &ierr); /* the lines are meshed already */
-    gmshOptionSetNumber("Mesh.Smoothing", 0, &ierr);
-    gmshOptionSetNumber("Mesh.Renumber", 0,
-                        &ierr); /* boundary nodes are found again by their tags */
+    UTW_TRY(start_gmsh(err));
+    UTW_TRY(set_options(err));
+    gmshModelAdd("section", &ierr);
+    added = !ierr;
     UTW_TRY(generate(&b, err));
     UTW_TRY(read_mesh(&b, mesh, err));
     st = UTW_OK;
 done:
-    if (started) gmshFinalize(&ierr);
+    if (added) {
+        gmshModelMeshRemoveSizeCallback(&ierr);
+        gmshModelRemove(&ierr);
+    }
     boundary_clear(&b);
     return st;
 }

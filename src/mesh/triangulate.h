@@ -10,7 +10,7 @@
  * sides ask for them (Gmsh, Delaunay). Sides on the boundary and between parts get their
  * curve and parameters. Each surface of the mesh is a part. [out] *mesh, returned owned, connected.
  *  UTW_E_MESH when Gmsh finds no triangulation; UTW_E_NOMEM. One thread at a time. */
-utw_status utw_mesh_triangulate(const utw_net *net, const utw_division *division, utw_mesh **mesh,
-                                utw_error *err);
+utw_status utw_mesh_triangulate(const utw_net *net, const utw_division *division, double growth,
+                                utw_mesh **mesh, utw_error *err);
 
 #endif

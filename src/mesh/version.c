@@ -10,7 +10,8 @@ void utw_mesher_version(char *text, size_t n)
     int failed = 0, ignored = 0;
     char *version = NULL;
     if (text == NULL || n == 0) return;
-    /* the number in the header is that of the interface only; the library tells its own once started */
+    /* the number in the header is that of the interface only; the library tells its own once
+     * started */
     gmshInitialize(0, NULL, 0, &failed);
     if (!failed) {
         gmshOptionGetString("General.Version", &version, &failed);

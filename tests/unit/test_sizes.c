@@ -5,6 +5,7 @@
 #include "support/support.h"
 
 enum { N = 400 };
+#define GROWTH 0.83
 
 /* A row of points along a curve, their sizes between 0.001 and 1. */
 static void points(double (*xy)[2], double *size)
@@ -24,13 +25,12 @@ static void least_over_all_points(void **state)
     utw_sizes *sizes = NULL;
     double xy[N][2], size[N];
     points(xy, size);
-    assert_ok(utw_sizes_create(N, (const double(*)[2])xy, size, &sizes, &err));
+    assert_ok(utw_sizes_create(N, (const double(*)[2])xy, size, GROWTH, &sizes, &err));
     for (double x = -5; x < 5; x += 0.37)
         for (double y = -4; y < 4; y += 0.29) {
             double expected = UTW_INFINITY;
             for (int i = 0; i < N; i++)
-                expected = fmin(expected,
-                                size[i] + UTW_SIZE_GROWTH * hypot(x - xy[i][0], y - xy[i][1]));
+                expected = fmin(expected, size[i] + GROWTH * hypot(x - xy[i][0], y - xy[i][1]));
             assert_close(utw_sizes_at(sizes, (double[2]){x, y}), expected, 1e-15);
         }
     utw_sizes_free(sizes);
@@ -42,8 +42,8 @@ static void one_point_is_enough(void **state)
     utw_error err;
     utw_sizes *sizes = NULL;
     const double xy[1][2] = {{1.5, -2}}, size[1] = {0.37};
-    assert_ok(utw_sizes_create(1, xy, size, &sizes, &err));
-    assert_close(utw_sizes_at(sizes, (double[2]){4.5, 2}), 0.37 + 5 * UTW_SIZE_GROWTH, 1e-15);
+    assert_ok(utw_sizes_create(1, xy, size, GROWTH, &sizes, &err));
+    assert_close(utw_sizes_at(sizes, (double[2]){4.5, 2}), 0.37 + 5 * GROWTH, 1e-15);
     utw_sizes_free(sizes);
     utw_sizes_free(NULL);
 }
