@@ -298,7 +298,8 @@ typedef struct utw_solution utw_solution;
  *  Calls the mesher. When the tolerance is not reached the status is still UTW_OK and
  *  utw_solution_info() says so: the brackets hold all the same.
  *  Sources: docs/theory.md (Prager and Synge 1947; Trefftz 1935; Szabo and Babuska 1991).
- *  UTW_E_ARGUMENT, UTW_E_NOMEM, UTW_E_MESH, UTW_E_SINGULAR. */
+ *  UTW_E_ARGUMENT, UTW_E_NOMEM, UTW_E_MESH, UTW_E_SINGULAR; UTW_E_MATERIAL when only some parts have a
+ *  material. */
 UTW_API UTW_CHECK utw_status utw_solve(const utw_outline *outline, const utw_options *options,
                                        utw_solution **solution, utw_error *err);
 
@@ -309,6 +310,34 @@ UTW_API void utw_solution_free(utw_solution *solution);
  *  a Poisson's ratio (xf, yf, Asx, Asy, kx, ky) and the section has no material. */
 UTW_API UTW_CHECK utw_status utw_solution_constant(const utw_solution *solution, utw_constant which,
                                                    utw_quantity *quantity, utw_error *err);
+
+/** Stiffnesses of the bar: moduli times constants. With parts of different materials, bonded where they
+ *  touch, they are int E dA, int E y^2 dA and so on; the constants are then these over the moduli of the
+ *  first part's material, the centroid is the E-weighted one, and what needs one material (W, Z, Wt, centre
+ *  of flexure, shear areas) is absent. Different Poisson's ratios strain each other sideways: that is left
+ *  out, as beam theory does. */
+typedef enum utw_stiffness {
+    UTW_STIFFNESS_EA = 0, /* [F] */
+    UTW_STIFFNESS_EIXX,   /* about the weighted centroid [F L^2] */
+    UTW_STIFFNESS_EIYY,
+    UTW_STIFFNESS_EIXY,
+    UTW_STIFFNESS_GJ,  /* [F L^2] */
+    UTW_STIFFNESS_EIW, /* about the shear centre [F L^4] */
+    UTW_STIFFNESS_COUNT
+} utw_stiffness;
+
+/** Key such as "EIxx"; NULL when out of range. */
+UTW_API const char *utw_stiffness_key(utw_stiffness which);
+
+/** The constant it belongs to; UTW_CONSTANT_COUNT when out of range. */
+UTW_API utw_constant utw_stiffness_constant(utw_stiffness which);
+
+/** One stiffness. UTW_E_ARGUMENT when out of range, UTW_E_MATERIAL without material. */
+UTW_API UTW_CHECK utw_status utw_solution_stiffness(const utw_solution *solution, utw_stiffness which,
+                                                    utw_quantity *quantity, utw_error *err);
+
+/** 1 when parts differ in E or in Poisson's ratio. */
+UTW_API int utw_solution_composite(const utw_solution *solution);
 
 /** What the solution took. */
 typedef struct utw_solution_info {

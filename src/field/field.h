@@ -15,6 +15,7 @@ typedef struct utw_setting {
     const utw_lift *lift;
     utw_basis_store *store;
     const double *conductivity; /* [n_part] k of pair.h, > 0; NULL: 1 */
+    const double *axial;        /* [n_part] e of pair.h, > 0; NULL: k */
     int n_pair;
     const utw_pair *pair; /* [n_pair] */
 } utw_setting;
@@ -58,8 +59,8 @@ typedef struct utw_measures {
     double stress[UTW_PAIR_MAX]
                  [UTW_PAIR_MAX];            /* int (k grad u_i - pi_i) . (k grad u_j - pi_j) / k */
     double gap[UTW_PAIR_MAX][UTW_PAIR_MAX]; /* int (k grad u_i - q_i) . (k grad u_j - q_j) / k */
-    double mean[UTW_PAIR_MAX];              /* int u_i dA */
-    double product[UTW_PAIR_MAX];           /* int u_i u_0 dA */
+    double mean[UTW_PAIR_MAX];              /* int e u_i dA */
+    double product[UTW_PAIR_MAX];           /* int e u_i u_0 dA */
 } utw_measures;
 
 /** Integrate. share[n_tri][n_pair] (may be NULL) receives each element's part of gap[i][i];

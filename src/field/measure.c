@@ -33,6 +33,12 @@ static double conductivity(const utw_field *f, int tri)
                : f->setting.conductivity[f->setting.mesh->tri[tri].part];
 }
 
+static double axial(const utw_field *f, int tri)
+{
+    return f->setting.axial == NULL ? conductivity(f, tri)
+                                    : f->setting.axial[f->setting.mesh->tri[tri].part];
+}
+
 static void transform(const utw_field *f, const utw_element *el, const double xy[2],
                       const double J[4], double r, double s, const double *phi, const double *dphi,
                       const double *dr, const double *ds, point_values *v)
@@ -87,7 +93,7 @@ static utw_status measure_element(const utw_field *f, const utw_element *el, scr
     if (st != UTW_OK) return st;
     const utw_table *t = w->map.table;
     const int np = f->setting.n_pair, c = 2 * np, nf = t->n_function;
-    const double k = conductivity(f, el->tri);
+    const double k = conductivity(f, el->tri), e = axial(f, el->tri);
     double greatest = 0;
     spread(f, el, t->order, w->C);
     cblas_dgemm(CblasRowMajor, CblasNoTrans, CblasTrans, t->n_point, c, nf, 1, t->Nr, nf, w->C, nf,
@@ -108,8 +114,8 @@ static utw_status measure_element(const utw_field *f, const utw_element *el, scr
         greatest = fmax(greatest, sx * sx + sy * sy);
         m->area += dA;
         for (int i = 0; i < np; i++) {
-            m->mean[i] += dA * w->u[q * np + i];
-            m->product[i] += dA * w->u[q * np + i] * w->u[q * np];
+            m->mean[i] += e * dA * w->u[q * np + i];
+            m->product[i] += e * dA * w->u[q * np + i] * w->u[q * np];
         }
     }
     *peak = sqrt(greatest);

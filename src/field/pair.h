@@ -2,8 +2,8 @@
  * The pairs of problems that bound each other: a potential u with given load, and an equilibrated
  * flux q of the same load.
  *
- * Potential:  int k grad u . grad v = int k (g . grad v + s v) for all v         (free on the
- * boundary) Flux:       q = k P + curl chi, with int q . grad v = int k (g . grad v + s v) for all
+ * Potential:  int k grad u . grad v = int (k g . grad v + e s v) for all v        (free on the
+ * boundary; e is k unless the setting says otherwise) Flux:       q = k P + curl chi, with int q . grad v = int k (g . grad v + s v) for all
  * v, curl chi = (chi_y, -chi_x); chi minimises int |q|^2 / k: on every loop chi is known up to a
  * constant, zero on the outer loop. Then int |k grad u - q|^2 / k is the sum of both errors (Prager
  * and Synge, Quarterly of Applied Mathematics 5 (1947) 241-269), element by element. */

@@ -185,15 +185,26 @@ static void collect_loads(solver *s)
     }
 }
 
+/* The sources of the potentials on one element, per unit of k. */
+static const utw_poly *sources(const solver *s, int tri, utw_poly scaled[UTW_PAIR_MAX])
+{
+    if (s->set->axial == NULL) return (const utw_poly *)s->source;
+    const double e = s->set->axial[s->set->mesh->tri[tri].part] / conductivity(s->set, tri);
+    for (int i = 0; i < n_pairs(s); i++)
+        for (int j = 0; j < 6; j++) scaled[i][j] = e * s->source[i][j];
+    return (const utw_poly *)scaled;
+}
+
 /* K, and F[2 n_pair][n] with the boundary data of chi brought to the right-hand side. */
 static utw_status make_element(solver *s, const utw_element *el, utw_error *err)
 {
     utw_status st = UTW_E_INTERNAL;
     const int np = n_pairs(s), n = el->n;
+    utw_poly scaled[UTW_PAIR_MAX];
     if (el->blend.any) UTW_TRY(utw_element_map(el, s->set->store, &s->map, err));
     UTW_TRY(utw_element_stiffness(el, s->set->store, &s->map, s->K, s->work, err));
     UTW_TRY(utw_element_loads(el, s->set->store, &s->map, 2 * np, (const utw_poly(*)[2])s->load, np,
-                              (const utw_poly *)s->source, s->F, s->work, err));
+                              sources(s, el->tri, scaled), s->F, s->work, err));
     if (boundary_data(s, el, s->known)) {
         cblas_dgemm(CblasRowMajor, CblasNoTrans, CblasNoTrans, np, n, n, -1, s->known, n, s->K, n,
                     1, s->F + np * n, n);

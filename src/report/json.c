@@ -23,6 +23,25 @@ static void add_constants(utw_json_writer *w, cJSON *root)
     }
 }
 
+/* Only for parts of different materials. */
+static void add_stiffness(utw_json_writer *w, cJSON *root)
+{
+    const utw_solution *s = w->report->solution;
+    if (!utw_solution_composite(s)) return;
+    utw_json_add_text(w, root, "reference_material", s->composite.reference->name);
+    cJSON *all = utw_json_add_object(w, root, "stiffness");
+    for (int k = 0; k < UTW_STIFFNESS_COUNT; k++) {
+        utw_quantity q;
+        utw_error why;
+        if (utw_solution_stiffness(s, (utw_stiffness)k, &q, &why) != UTW_OK) continue;
+        cJSON *one = utw_json_add_object(w, all, utw_stiffness_key((utw_stiffness)k));
+        utw_json_add_number(w, one, "value", q.value);
+        utw_json_add_number(w, one, "low", q.low);
+        utw_json_add_number(w, one, "high", q.high);
+        utw_json_add_text(w, one, "trust", utw_report_trust(q.trust));
+    }
+}
+
 static void add_solution(utw_json_writer *w, cJSON *root)
 {
     utw_solution_info info;
@@ -67,8 +86,8 @@ static void add_dimensions(utw_json_writer *w, cJSON *root)
 
 /* The members of the document, in its order. A further kind of result is one more line. */
 static void (*const members[])(utw_json_writer *, cJSON *) = {
-    add_heading,        add_dimensions,          add_constants,    add_solution,
-    utw_json_add_cases, utw_json_add_comparison, utw_json_add_push};
+    add_heading,  add_dimensions,     add_constants,           add_stiffness,
+    add_solution, utw_json_add_cases, utw_json_add_comparison, utw_json_add_push};
 
 utw_status utw_report_json(const utw_report *report, char **text, utw_error *err)
 {

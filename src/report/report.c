@@ -14,23 +14,12 @@
     "Linear elastic material and small displacements; no buckling, no fatigue, no plastic "        \
     "collapse. The governing design code and a licensed engineer decide."
 
-/* Parts of materials that differ in stiffness. */
-static int is_composite(const utw_outline *o)
-{
-    for (int p = 1; p < o->n_part; p++) {
-        if (o->part[p].material == o->part[0].material) continue;
-        const utw_material *a = &o->material[o->part[0].material],
-                           *b = &o->material[o->part[p].material];
-        if (a->E != b->E || a->nu != b->nu) return 1;
-    }
-    return 0;
-}
-
 const char *utw_report_caution(const utw_solution *solution)
 {
-    return is_composite(solution->outline)
-               ? "The parts are of different materials: these are the constants of the shape as if "
-                 "it were of one material, not those of the composite bar. " CAUTION
+    return utw_solution_composite(solution)
+               ? "The parts are of different materials, taken as bonded where they touch: the "
+                 "constants are the stiffnesses over the moduli of the first part's material, and "
+                 "what different Poisson's ratios do sideways is left out. " CAUTION
                : CAUTION;
 }
 
@@ -88,6 +77,17 @@ void utw_report_unit(const utw_solution *solution, utw_constant which, char *tex
         snprintf(text, n, "%s", length);
     else
         snprintf(text, n, "%s^%d", length, power);
+}
+
+void utw_report_stiffness_unit(const utw_solution *solution, utw_stiffness which, char *text,
+                               size_t n)
+{
+    const utw_outline *o = solution->outline;
+    const int power = utw_constant_power(utw_stiffness_constant(which)) - 2; /* modulus: F/L^2 */
+    if (power == 0)
+        snprintf(text, n, "%s", o->force_unit);
+    else
+        snprintf(text, n, "%s %s^%d", o->force_unit, o->length_unit, power);
 }
 
 void utw_report_free(char *text)

@@ -26,4 +26,8 @@ utw_trust utw_report_peak_trust(const utw_stress_peak *peak);
 /** Unit of a constant, such as "mm^4", "deg" for angles, "-" for factors. [out] text[n]. */
 void utw_report_unit(const utw_solution *solution, utw_constant which, char *text, size_t n);
 
+/** Unit of a stiffness, such as "N mm^2". [out] text[n]. */
+void utw_report_stiffness_unit(const utw_solution *solution, utw_stiffness which, char *text,
+                               size_t n);
+
 #endif

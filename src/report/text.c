@@ -35,6 +35,7 @@ typedef struct table {
     const utw_solution *solution;
     utw_text *text;
     row row[UTW_CONSTANT_COUNT];
+    row stiffness[UTW_STIFFNESS_COUNT]; /* of a bar of different materials */
     char absent[UTW_CONSTANT_COUNT][sizeof(((utw_error *)0)->text)]; /* why there is none, or "" */
     int width[3];                                                    /* of value, low, high */
 } table;
@@ -76,6 +77,35 @@ static double noise_of(const utw_solution *s, utw_constant which)
     }
 }
 
+/* The row's number as text; the columns become wide enough for it. */
+static void set_number(table *t, row *r, double noise)
+{
+    utw_number_write(&r->quantity, noise, &r->number);
+    const char *const cell[3] = {r->number.value, r->number.low, r->number.high};
+    for (int k = 0; k < 3; k++) {
+        const int n = (int)strlen(cell[k]);
+        t->width[k] = n > t->width[k] ? n : t->width[k];
+    }
+}
+
+static utw_status fill_stiffness(table *t, utw_error *err)
+{
+    utw_status st = UTW_OK;
+    for (int w = 0; utw_solution_composite(t->solution) && w < UTW_STIFFNESS_COUNT; w++) {
+        row *r = &t->stiffness[w];
+        r->which = utw_stiffness_constant((utw_stiffness)w);
+        utw_report_stiffness_unit(t->solution, (utw_stiffness)w, r->unit, sizeof r->unit);
+        UTW_TRY(utw_solution_stiffness(t->solution, (utw_stiffness)w, &r->quantity, err));
+        const utw_quantity *q = &t->row[r->which].quantity; /* noise in the stiffness' own size */
+        set_number(t, r,
+                   q->value != 0
+                       ? noise_of(t->solution, r->which) * fabs(r->quantity.value / q->value)
+                       : 0);
+    }
+done:
+    return st;
+}
+
 static void fill(table *t)
 {
     for (int w = 0; w < UTW_CONSTANT_COUNT; w++) {
@@ -88,12 +118,7 @@ static void fill(table *t)
             memcpy(t->absent[w], why.text, sizeof why.text);
             continue;
         }
-        utw_number_write(&r->quantity, noise_of(t->solution, r->which), &r->number);
-        const char *const cell[3] = {r->number.value, r->number.low, r->number.high};
-        for (int k = 0; k < 3; k++) {
-            const int n = (int)strlen(cell[k]);
-            t->width[k] = n > t->width[k] ? n : t->width[k];
-        }
+        set_number(t, r, noise_of(t->solution, r->which));
     }
 }
 
@@ -123,6 +148,18 @@ static void write_table(const table *t)
                        r->number.value, r->number.low, r->number.high,
                        utw_report_trust(r->quantity.trust), r->unit);
         }
+    }
+}
+
+static void write_stiffness(const table *t)
+{
+    if (!utw_solution_composite(t->solution)) return;
+    utw_text_add(t->text, "Stiffness of the bar\n");
+    for (int w = 0; w < UTW_STIFFNESS_COUNT; w++) {
+        const row *r = &t->stiffness[w];
+        write_line(t, utw_stiffness_key((utw_stiffness)w), utw_constant_meaning(r->which),
+                   r->number.value, r->number.low, r->number.high,
+                   utw_report_trust(r->quantity.trust), r->unit);
     }
 }
 
@@ -259,11 +296,13 @@ utw_status utw_report_text(const utw_report *report, char **text, utw_error *err
     t->solution = report->solution;
     t->text = &content;
     fill(t);
+    UTW_TRY(fill_stiffness(t, err));
     const char *name = utw_outline_name(t->solution->outline);
     utw_text_add(&content, "%s\nUnits: %s. x to the right, y up, angles in degrees.\n\n",
                  name[0] != '\0' ? name : "Section without a name",
                  utw_outline_units(t->solution->outline));
     write_table(t);
+    write_stiffness(t);
     utw_report_text_cases(report, &content);
     write_notes(t);
     UTW_TRY(utw_text_take(&content, text, err));

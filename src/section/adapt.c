@@ -27,7 +27,6 @@ void utw_solved_clear(utw_solved *s)
     utw_mesh_free(s->mesh);
     utw_net_free(s->net);
     utw_basis_store_free(s->store);
-    utw_free(s->conductivity);
     utw_free(s->peak);
     memset(s, 0, sizeof *s);
 }
@@ -63,6 +62,7 @@ typedef struct loop {
     const utw_options *options;
     utw_solved *s;
     int pairs; /* pairs whose gap is refined: the first so many */
+    int least_rounds;
     unsigned char *order;
     double *share; /* [n_tri][UTW_N_PAIR] */
 } loop;
@@ -99,8 +99,14 @@ done:
 static utw_status solve_once(loop *l, utw_error *err)
 {
     utw_solved *s = l->s;
-    const utw_setting set = {s->mesh,         s->rim,     s->lift, s->store,
-                             s->conductivity, UTW_N_PAIR, s->pair};
+    const utw_setting set = {s->mesh,
+                             s->rim,
+                             s->lift,
+                             s->store,
+                             s->moduli == NULL ? NULL : s->moduli->shear,
+                             s->moduli == NULL ? NULL : s->moduli->axial,
+                             UTW_N_PAIR,
+                             s->pair};
     utw_field *field = NULL;
     utw_status st = utw_field_solve(&set, l->order, &field, err);
     if (st != UTW_OK) return st;
@@ -207,17 +213,34 @@ done:
     return st;
 }
 
+/* With a fixed order and two rounds the first one is of another order. */
+static int first_order(const loop *l)
+{
+    const int fixed = l->options->fixed_order;
+    if (fixed == 0) return FIRST_ORDER;
+    return l->least_rounds == 1 ? fixed : fixed > 1 ? fixed - 1 : 2;
+}
+
 static utw_status run(loop *l, utw_error *err)
 {
     utw_status st = UTW_E_INTERNAL;
     const utw_options *o = l->options;
     const int n = l->s->mesh->n_tri;
     UTW_TRY_ALLOC(l->order = utw_alloc((size_t)n, 1));
-    memset(l->order, o->fixed_order > 0 ? o->fixed_order : FIRST_ORDER, (size_t)n);
+    memset(l->order, first_order(l), (size_t)n);
     UTW_TRY(renew_mesh_data(l, err));
     for (;;) {
         UTW_TRY(solve_once(l, err));
-        if (o->fixed_order > 0 || worst_gap(l) <= o->tolerance) break;
+        if (o->fixed_order > 0) {
+            if (l->s->rounds >= l->least_rounds) break;
+            memset(l->order, o->fixed_order, (size_t)n);
+            continue;
+        }
+        if (worst_gap(l) <= o->tolerance) {
+            if (l->s->rounds >= l->least_rounds) break;
+            for (int t = 0; t < l->s->mesh->n_tri; t++) l->order[t]++;
+            continue;
+        }
         if (l->s->rounds >= o->max_rounds || l->s->field->n_free > o->max_unknowns) break;
         int changed = 0;
         UTW_TRY(refine(l, &changed, err));
@@ -228,15 +251,20 @@ done:
     return st;
 }
 
-utw_status utw_adapt(utw_net *net, double *conductivity, const utw_options *options, int poisson,
-                     utw_solved *s, utw_error *err)
+utw_status utw_adapt(utw_net *net, const utw_moduli *moduli, const utw_options *options,
+                     int poisson, utw_solved *s, utw_error *err)
 {
     utw_status st = UTW_E_INTERNAL;
-    loop l = {options, s, poisson ? UTW_N_PAIR : UTW_SHEAR_Y + 1, NULL, NULL};
+    loop l = {options, s, poisson ? UTW_N_PAIR : UTW_SHEAR_Y + 1, 1, NULL, NULL};
     memset(s, 0, sizeof *s);
     s->net = net;
-    s->conductivity = conductivity;
+    s->moduli = moduli;
     utw_problems(s->pair);
+    if (moduli != NULL) { /* their fluxes would need data on the sides between parts */
+        s->pair[UTW_SHEAR_X].balanced = s->pair[UTW_SHEAR_Y].balanced = 0;
+        l.pairs = UTW_TORSION + 1;
+        l.least_rounds = 2;
+    }
     const double start = utw_seconds();
     const utw_mesh_options mesh_options = {options->mesh_scale, options->tolerance};
     UTW_TRY(utw_mesh_create(net, &mesh_options, &s->mesh, err));

@@ -8,10 +8,10 @@
 /** Integrals of one section. Weighted by weight[material] when weights are given (E-weighted
  *  properties). All moments are about the (weighted) centroid, in the drawing's directions.
  *
- *  angle: from the x axis to the axis of I1, counter-clockwise, in (-pi/2, pi/2]; turning the section
- *  turns it by as much. It is 0 when I1 = I2, and exactly 0 or pi/2 when Ixy = 0, each to rounding.
- *  xp, yp: on either side of the line x = xp (y = yp) lies half the weighted area. Where an empty gap
- *  of the section leaves the line free, it is the middle of the gap. */
+ *  angle: from the x axis to the axis of I1, counter-clockwise, in (-pi/2, pi/2]; turning the
+ * section turns it by as much. It is 0 when I1 = I2, and exactly 0 or pi/2 when Ixy = 0, each to
+ * rounding. xp, yp: on either side of the line x = xp (y = yp) lies half the weighted area. Where
+ * an empty gap of the section leaves the line free, it is the middle of the gap. */
 typedef struct utw_area {
     double A;                        /* [L^2] */
     double perimeter;                /* [L] */
@@ -32,12 +32,11 @@ typedef struct utw_area {
  *  weight 1. The perimeter is of the geometry: all loops of all parts, pieces that two parts share
  *  not counted.
  *  Accuracy: lines and cubics to rounding (polynomial integrands), arcs and ellipses to 1e-14
- *  relative; the integrals are taken about the centroid in a second pass, so that a section far from
- *  the origin loses no more than its coordinates have lost. I2 is integrated in its own axes, so
- *  that a slender section keeps its digits.
- *  Source: Green's theorem; principal axes by Mohr's circle, plastic moduli (common practice).
- *  UTW_E_ARGUMENT when a weight is not positive or loops run the wrong way round, UTW_E_OUTLINE when
- *  several parts do not fit together, UTW_E_NOMEM. */
+ *  relative; the integrals are taken about the centroid in a second pass, so that a section far
+ * from the origin loses no more than its coordinates have lost. I2 is integrated in its own axes,
+ * so that a slender section keeps its digits. Source: Green's theorem; principal axes by Mohr's
+ * circle, plastic moduli (common practice). UTW_E_ARGUMENT when a weight is not positive or loops
+ * run the wrong way round, UTW_E_OUTLINE when several parts do not fit together, UTW_E_NOMEM. */
 utw_status utw_area_compute(const utw_outline *outline, const double *weight, utw_area *area,
                             utw_error *err);
 

@@ -19,7 +19,7 @@ static utw_peak on_side(const utw_solved *s, int t, int k, double u)
     utw_field_at(s->field, t, a[0] + u * (b[0] - a[0]), a[1] + u * (b[1] - a[1]), peak.at, NULL, p,
                  q);
     const utw_pair *pair = &s->pair[UTW_TORSION];
-    const double c = s->conductivity == NULL ? 1 : s->conductivity[s->mesh->tri[t].part];
+    const double c = s->moduli == NULL ? 1 : s->moduli->shear[s->mesh->tri[t].part];
     double stress[2], apart[2];
     for (int i = 0; i < 2; i++) {
         const double P = c * utw_poly_at(pair->P[i], peak.at[0], peak.at[1]);

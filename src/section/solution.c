@@ -96,7 +96,9 @@ utw_status utw_solve(const utw_outline *outline, const utw_options *options,
     s->outline = outline;
     s->options = options == NULL ? defaults : *options;
     s->nu = poisson_of(outline);
-    UTW_TRY(utw_area_compute(outline, NULL, &s->area, err));
+    UTW_TRY(utw_composite_of(outline, &s->composite, err));
+    const int several = s->composite.reference != NULL;
+    UTW_TRY(utw_area_compute(outline, s->composite.by_material, &s->area, err));
     /* work about the centroid, or cancellation eats the bracket; a power of two as the unit changes
      * no digit */
     s->origin[0] = s->area.xc;
@@ -104,11 +106,16 @@ utw_status utw_solve(const utw_outline *outline, const utw_options *options,
     s->unit = exp2(round(0.5 * log2(s->area.A)));
     UTW_TRY(utw_net_create(outline, &net, err));
     utw_net_move(net, s->origin, s->unit);
-    UTW_TRY(utw_adapt(net, NULL, &s->options, !isnan(s->nu), &s->solved, err));
+    UTW_TRY(utw_adapt(net, several ? &s->composite.by_part : NULL, &s->options, !isnan(s->nu),
+                      &s->solved, err));
     utw_constants_of_area(&s->area, s->value);
-    utw_constants_of_solution(&s->area, s->unit, &s->solved, s->nu, s->value);
     UTW_TRY(note_corners(s, err));
-    torsion_modulus(s);
+    if (several) {
+        utw_constants_of_composite(&s->area, s->unit, &s->solved, s->value);
+    } else {
+        utw_constants_of_solution(&s->area, s->unit, &s->solved, s->nu, s->value);
+        torsion_modulus(s);
+    }
     s->seconds = utw_seconds() - start;
     *solution = s;
     s = NULL;
@@ -122,6 +129,7 @@ void utw_solution_free(utw_solution *s)
 {
     if (s == NULL) return;
     utw_solved_clear(&s->solved);
+    utw_composite_clear(&s->composite);
     utw_free(s->corner);
     utw_free(s);
 }
@@ -132,6 +140,9 @@ utw_status utw_solution_constant(const utw_solution *s, utw_constant which, utw_
     if (s == NULL || quantity == NULL || (int)which < 0 || which >= UTW_CONSTANT_COUNT)
         return utw_fail(err, UTW_E_ARGUMENT, "utw_solution_constant: no such constant");
     const utw_constant_value *v = &s->value[which];
+    if (v->absent == UTW_E_MATERIAL && s->composite.reference != NULL)
+        return utw_fail(err, UTW_E_MATERIAL, "%s is given for sections of one material only",
+                        utw_constant_key(which));
     if (v->absent == UTW_E_MATERIAL)
         return utw_fail(err, UTW_E_MATERIAL,
                         "%s needs a Poisson's ratio: give every part one material with \"nu\"",
@@ -166,4 +177,50 @@ void utw_solution_get_info(const utw_solution *s, utw_solution_info *info)
                                 s->solved.seconds_mesh,
                                 s->solved.seconds_solve,
                                 s->outline->seconds + s->seconds};
+}
+
+/* ---- stiffnesses ----------------------------------------------------------------------------- */
+
+static const struct {
+    const char *key;
+    utw_constant constant;
+    int shear; /* times G, not E */
+} stiffness[UTW_STIFFNESS_COUNT] = {
+    [UTW_STIFFNESS_EA] = {"EA", UTW_A, 0},       [UTW_STIFFNESS_EIXX] = {"EIxx", UTW_IXX, 0},
+    [UTW_STIFFNESS_EIYY] = {"EIyy", UTW_IYY, 0}, [UTW_STIFFNESS_EIXY] = {"EIxy", UTW_IXY, 0},
+    [UTW_STIFFNESS_GJ] = {"GJ", UTW_J, 1},       [UTW_STIFFNESS_EIW] = {"EIw", UTW_IW, 0},
+};
+
+const char *utw_stiffness_key(utw_stiffness which)
+{
+    return (int)which >= 0 && which < UTW_STIFFNESS_COUNT ? stiffness[which].key : NULL;
+}
+
+utw_constant utw_stiffness_constant(utw_stiffness which)
+{
+    return (int)which >= 0 && which < UTW_STIFFNESS_COUNT ? stiffness[which].constant
+                                                          : UTW_CONSTANT_COUNT;
+}
+
+int utw_solution_composite(const utw_solution *s)
+{
+    return s != NULL && s->composite.reference != NULL;
+}
+
+utw_status utw_solution_stiffness(const utw_solution *s, utw_stiffness which,
+                                  utw_quantity *quantity, utw_error *err)
+{
+    if (s == NULL || quantity == NULL || (int)which < 0 || which >= UTW_STIFFNESS_COUNT)
+        return utw_fail(err, UTW_E_ARGUMENT, "utw_solution_stiffness: no such stiffness");
+    const int m = s->outline->part[0].material;
+    if (m < 0)
+        return utw_fail(err, UTW_E_MATERIAL, "%s needs a material: give the parts one",
+                        stiffness[which].key);
+    const utw_material *r = &s->outline->material[m];
+    const double factor = stiffness[which].shear ? r->E / (2 * (1 + r->nu)) : r->E;
+    utw_quantity q;
+    const utw_status st = utw_solution_constant(s, stiffness[which].constant, &q, err);
+    if (st == UTW_OK)
+        *quantity = (utw_quantity){factor * q.value, factor * q.low, factor * q.high, q.trust};
+    return st;
 }

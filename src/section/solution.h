@@ -6,12 +6,14 @@
 #include "outline/outline.h"
 #include "section/adapt.h"
 #include "section/area.h"
+#include "section/composite.h"
 #include "section/constants.h"
 
 struct utw_solution {
     const utw_outline *outline; /* borrowed */
     utw_area area;              /* in the drawing's coordinates */
-    double nu;                  /* Poisson's ratio, NAN without material */
+    double nu;                  /* Poisson's ratio, NAN without material or with several */
+    utw_composite composite;    /* reference NULL: one material */
     double origin[2], unit;     /* the solved net: p = (drawing - origin) / unit */
     utw_solved solved;
     utw_options options;
