@@ -803,7 +803,8 @@ typedef struct utw_comparison utw_comparison;
 /** Compare. [in] solution, idealisation, borrowed; they must outlive the comparison. limit: the greatest difference
  *  at which the thin-walled value may stand for the solid one, such as 0.05; 1e-6 .. 1. [out] *comparison, returned
  *  owned: utw_comparison_free(). Compared are A, xc, yc, Ixx, Iyy, Ixy, I1, I2, J, Wt, xs, ys, Iw, Asx, Asy; where the
- *  thin-walled Iw is 0, Iw_secondary stands for it. UTW_E_ARGUMENT, UTW_E_NOMEM. */
+ *  thin-walled Iw is 0, Iw_secondary stands for it. UTW_E_ARGUMENT, UTW_E_NOMEM; UTW_E_MATERIAL for parts of
+ *  different materials. */
 UTW_API UTW_CHECK utw_status utw_compare(const utw_solution *solution, const utw_idealisation *idealisation,
                                          double limit, utw_comparison **comparison, utw_error *err);
 

@@ -207,6 +207,10 @@ utw_status utw_compare(const utw_solution *solution, const utw_idealisation *ide
     if (!(limit >= LEAST_LIMIT && limit <= 1))
         return utw_fail(err, UTW_E_ARGUMENT, "utw_compare: the limit %g is not between %g and 1",
                         limit, LEAST_LIMIT);
+    if (utw_solution_composite(solution))
+        return utw_fail(err, UTW_E_MATERIAL,
+                        "the parts are of different materials; the thin-walled theory is compared "
+                        "for sections of one material");
     UTW_TRY_ALLOC(c = utw_alloc(1, sizeof *c));
     c->solution = solution;
     c->idealisation = idealisation;

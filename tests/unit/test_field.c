@@ -34,7 +34,7 @@ static solved solve(int order, const double *conductivity)
     assert_ok(utw_rim_create(s.mesh, &s.rim, &err));
     assert_ok(utw_lift_create(s.mesh, s.rim, PAIRS, pairs, &s.lift, &err));
     assert_ok(utw_basis_store_create(&s.store, &err));
-    const utw_setting set = {s.mesh, s.rim, s.lift, s.store, conductivity, PAIRS, pairs};
+    const utw_setting set = {s.mesh, s.rim, s.lift, s.store, conductivity, NULL, PAIRS, pairs};
     const unsigned char orders[2] = {(unsigned char)order, (unsigned char)order};
     assert_ok(utw_field_solve(&set, orders, &s.field, &err));
     return s;

@@ -27,7 +27,7 @@ static utw_mesh *coarse(const char *text, utw_net **net)
     *net = net_of(o);
     utw_outline_free(o);
     assert_ok(utw_division_create(*net, 1, &division, &err));
-    assert_ok(utw_mesh_triangulate(*net, division, &mesh, &err));
+    assert_ok(utw_mesh_triangulate(*net, division, 0.7, &mesh, &err));
     utw_division_free(division);
     mesh_check(mesh);
     return mesh;
