@@ -34,7 +34,7 @@
 #define FACE_SHADE 0.25
 
 /* Pixels a millimetre of the image. */
-#define PER_MM 8
+#define PER_MM 6
 
 /* A section that does not warp: omega less than this part of its area. */
 #define NO_WARPING 1e-9
@@ -346,7 +346,7 @@ static utw_status draw_bar(const utw_page *page, const bar *b, const utw_bands *
     unsigned *pixel = NULL;
     const utw_box d = page->drawing;
     const double area = (d.x1 - d.x0) * (d.y1 - d.y0);
-    const double per_mm = fmin(PER_MM, sqrt(1.2e6 / area)); /* so many pixels at most */
+    const double per_mm = fmin(PER_MM, sqrt(4e5 / area)); /* so many pixels at most */
     const int nx = 1 + (int)((d.x1 - d.x0) * per_mm), ny = 1 + (int)((d.y1 - d.y0) * per_mm);
     UTW_TRY(utw_stage_create(nx, ny, box, &stage, err));
     build_sides(b, stage);
