@@ -10,12 +10,20 @@
 /* Principal second moments closer than this are the same: every axis is one. */
 #define SAME_MOMENTS 1e-9
 
+/* A coordinate as text; less than 1e-5 of the section's size is what symmetry leaves of a zero. */
+static void coordinate(const utw_sitting *p, utw_constant which, char *text, size_t n)
+{
+    const double *box = p->solution->outline->box, x = utw_sitting_value(p, which);
+    const double size = hypot(box[2] - box[0], box[3] - box[1]);
+    utw_sitting_length(p, fabs(x) < 1e-5 * size ? 0 : x, text, n);
+}
+
 static void note_point(const utw_sitting *p, utw_notes *notes, int sign, const char *what,
                        utw_constant x, utw_constant y)
 {
     char xt[40], yt[40];
-    utw_sitting_length(p, utw_sitting_value(p, x), xt, sizeof xt);
-    utw_sitting_length(p, utw_sitting_value(p, y), yt, sizeof yt);
+    coordinate(p, x, xt, sizeof xt);
+    coordinate(p, y, yt, sizeof yt);
     utw_notes_add(notes, sign, "%s (%s, %s) %s", what, xt, yt, p->solution->outline->length_unit);
 }
 

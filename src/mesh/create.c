@@ -10,7 +10,11 @@
 #include "mesh/mesh.h"
 #include "mesh/triangulate.h"
 
-enum { MOST_TRIES = 6, MOST_PASSES = 3 };
+enum {
+    MOST_LOCAL = 5,  /* tries with shorter sides where elements fold */
+    MOST_TRIES = 11, /* in all; the later ones with shorter sides everywhere */
+    MOST_PASSES = 3
+};
 
 /* A corner flatter than this between two boundary sides is as good as smooth: the map's determinant
  * vanishes there. */
@@ -18,6 +22,8 @@ enum { MOST_TRIES = 6, MOST_PASSES = 3 };
 /* Determinant over that of the straight triangle below which the curved sides of an element are
  * halved. */
 #define GOOD_QUALITY 0.3
+/* Sides of the next try against those of the last one. */
+#define SHORTER 0.6
 /* Inside, sizes grow by this much per length of distance from the boundary. With 1 a fillet of a
  * thousandth of the wall took 40 times as many unknowns for 1e-6, with less than this elements are
  * only added. */
@@ -86,18 +92,40 @@ done:
     return st;
 }
 
-static utw_status try_once(const utw_net *net, double scale, double target, utw_mesh **mesh,
-                           utw_error *err)
+/* Shorter sides on the curves of elements that fold, for the next try; 0 when none of them lies on
+ * one. */
+static int shorten(const utw_mesh *mesh, double *finer)
+{
+    int any = 0;
+    unsigned char *done = utw_alloc((size_t)mesh->net->n_edge, 1);
+    if (done == NULL) return 0; /* the next try then is finer everywhere */
+    for (int t = 0; t < mesh->n_tri; t++) {
+        if (quality(mesh, t) >= UTW_LEAST_QUALITY) continue;
+        for (int k = 0; k < 3; k++) {
+            const int edge = mesh->tri[t].curve[k];
+            if (edge < 0 || done[edge]) continue;
+            finer[edge] *= SHORTER;
+            any = done[edge] = 1;
+        }
+    }
+    utw_free(done);
+    return any;
+}
+
+/* finer[n_edge]: shortened where elements fold; *local: 1 when that is worth another try. */
+static utw_status try_once(const utw_net *net, double scale, double target, double *finer,
+                           int *local, utw_mesh **mesh, utw_error *err)
 {
     utw_status st = UTW_E_INTERNAL;
     utw_division *division = NULL;
     utw_mesh *m = NULL;
-    UTW_TRY(utw_division_create(net, scale, &division, err));
+    UTW_TRY(utw_division_create(net, scale, finer, &division, err));
     UTW_TRY(utw_mesh_triangulate(net, division, GROWTH * fmin(scale, 1), &m, err));
     UTW_TRY(divide_flat_corners(m, err));
     UTW_TRY(straighten(m, err));
     UTW_TRY(utw_mesh_add_layers(m, target, err));
     if (utw_mesh_quality(m) < UTW_LEAST_QUALITY) {
+        *local = shorten(m, finer);
         st = utw_fail(
             err, UTW_E_MESH,
             "an element on a curve folds over; check the outline for walls of almost no thickness");
@@ -115,11 +143,18 @@ done:
 utw_status utw_mesh_create(const utw_net *net, const utw_mesh_options *options, utw_mesh **mesh,
                            utw_error *err)
 {
-    utw_status st = UTW_E_MESH;
-    double scale = options->scale;
+    utw_status st = UTW_E_INTERNAL;
+    double scale = options->scale, *finer;
+    UTW_TRY_ALLOC(finer = utw_alloc((size_t)net->n_edge, sizeof *finer));
+    for (int e = 0; e < net->n_edge; e++) finer[e] = 1;
+    st = UTW_E_MESH;
     for (int i = 0; i < MOST_TRIES && st == UTW_E_MESH; i++) {
-        st = try_once(net, scale, options->layer_target, mesh, err);
-        scale *= 0.6; /* shorter chords follow the curves more closely */
+        int local = 0;
+        st = try_once(net, scale, options->layer_target, finer, &local, mesh, err);
+        /* shorter chords follow the curves more closely */
+        if (!local || i >= MOST_LOCAL) scale *= SHORTER;
     }
+done:
+    utw_free(finer);
     return st;
 }

@@ -37,6 +37,7 @@ typedef struct divider {
     const utw_net *net;
     const utw_walls *walls;
     double scale;
+    const double *finer; /* [n_edge] a further factor, or NULL */
     spans list;
     double *node_h; /* [n_node] size at the nodes of the net */
 } divider;
@@ -56,19 +57,25 @@ static utw_status add_span(spans *list, span s, utw_error *err)
     return UTW_OK;
 }
 
+static double scale_of(const divider *d, int edge)
+{
+    return d->finer == NULL ? d->scale : d->scale * d->finer[edge];
+}
+
 static utw_status add_spans(divider *d, int edge, double t0, double t1, int depth, utw_error *err)
 {
     const utw_curve *c = &d->net->edge[edge].curve;
     const utw_curve part = utw_curve_piece(c, t0, t1);
+    const double scale = scale_of(d, edge);
     const double length = utw_curve_length(&part), turning = utw_curve_turning(&part);
     double h = UTW_INFINITY;
     static const double at[3] = {1.0 / 6, 0.5, 5.0 / 6};
     for (int k = 0; k < 3; k++) {
         const double wall =
-            utw_walls_thickness(d->walls, edge, t0 + at[k] * (t1 - t0), WEDGE / d->scale);
-        h = fmin(h, SIDE_PER_WALL * d->scale * wall);
+            utw_walls_thickness(d->walls, edge, t0 + at[k] * (t1 - t0), WEDGE / scale);
+        h = fmin(h, SIDE_PER_WALL * scale * wall);
     }
-    const double most = most_turning(c, d->scale);
+    const double most = most_turning(c, scale);
     if (depth < DEEPEST && (length > 2 * h || turning > 2 * most)) {
         const double tm = 0.5 * (t0 + t1);
         const utw_status st = add_spans(d, edge, t0, tm, depth + 1, err);
@@ -177,7 +184,7 @@ static utw_status cut_evenly(const divider *d, utw_division *out, utw_error *err
         double sum = 0;
         for (; i < d->list.n && s[i].edge == e; i++) sum += s[i].length / s[i].h;
         const double turns = utw_curve_turning(&d->net->edge[e].curve) /
-                             most_turning(&d->net->edge[e].curve, d->scale);
+                             most_turning(&d->net->edge[e].curve, scale_of(d, e));
         int n = (int)ceil(fmax(sum * (1 - 1e-6) - 0.15, turns));
         n = n < 1 ? 1 : n;
         if (utw_grow(&t, &capacity, total + (size_t)n + 1, sizeof(double)) != 0) {
@@ -206,11 +213,11 @@ done:
     return st;
 }
 
-utw_status utw_division_create(const utw_net *net, double scale, utw_division **division,
-                               utw_error *err)
+utw_status utw_division_create(const utw_net *net, double scale, const double *finer,
+                               utw_division **division, utw_error *err)
 {
     utw_status st = UTW_E_INTERNAL;
-    divider d = {.net = net, .scale = scale};
+    divider d = {.net = net, .scale = scale, .finer = finer};
     utw_division *out = NULL;
     utw_walls *walls = NULL;
     UTW_TRY(utw_walls_create(net, &walls, err));

@@ -15,9 +15,11 @@ typedef struct utw_division {
 
 /** Divide so that a side is at most about 1.5 scale times the local wall thickness, turns by at
  * most a right angle (60 degrees on cubics), and lengths along the boundary grow by less than a
- * factor of about 2.7 from one to the next. Returned owned: utw_division_free(). UTW_E_NOMEM. */
-utw_status utw_division_create(const utw_net *net, double scale, utw_division **division,
-                               utw_error *err);
+ * factor of about 2.7 from one to the next. Returned owned: utw_division_free(). UTW_E_NOMEM.
+ * [in] finer[n_edge]: a further factor on the sides of each edge, for places where the chords did
+ * not do; NULL: 1. */
+utw_status utw_division_create(const utw_net *net, double scale, const double *finer,
+                               utw_division **division, utw_error *err);
 void utw_division_free(utw_division *division);
 
 #endif

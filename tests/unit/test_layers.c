@@ -26,7 +26,7 @@ static utw_mesh *coarse(const char *text, utw_net **net)
     utw_outline *o = section_outline(UTW_NAN, "%s", text);
     *net = net_of(o);
     utw_outline_free(o);
-    assert_ok(utw_division_create(*net, 1, &division, &err));
+    assert_ok(utw_division_create(*net, 1, NULL, &division, &err));
     assert_ok(utw_mesh_triangulate(*net, division, 0.7, &mesh, &err));
     utw_division_free(division);
     mesh_check(mesh);

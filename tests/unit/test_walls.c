@@ -101,7 +101,7 @@ static void sides_follow_the_walls(void **state)
         int n[2];
         for (int fine = 0; fine < 2; fine++) {
             utw_division *d = NULL;
-            assert_ok(utw_division_create(net, fine ? 0.5 : 1, &d, &err));
+            assert_ok(utw_division_create(net, fine ? 0.5 : 1, NULL, &d, &err));
             assert_int_equal(d->n_edge, net->n_edge);
             n[fine] = d->first[d->n_edge];
             for (int e = 0; e < net->n_edge; e++) {
