@@ -51,7 +51,7 @@ done:
     return st;
 }
 
-static double quality(const utw_mesh *mesh, int t)
+double utw_mesh_triangle_quality(const utw_mesh *mesh, int t)
 {
     utw_blend b;
     utw_blend_of(mesh, &mesh->tri[t], &b);
@@ -62,7 +62,7 @@ static double quality(const utw_mesh *mesh, int t)
 double utw_mesh_quality(const utw_mesh *mesh)
 {
     double worst = 1;
-    for (int t = 0; t < mesh->n_tri; t++) worst = fmin(worst, quality(mesh, t));
+    for (int t = 0; t < mesh->n_tri; t++) worst = fmin(worst, utw_mesh_triangle_quality(mesh, t));
     return worst;
 }
 
@@ -77,7 +77,7 @@ static utw_status straighten(utw_mesh *mesh, utw_error *err)
         UTW_TRY_ALLOC(marked = utw_alloc((size_t)mesh->n_edge, 1));
         for (int t = 0; t < mesh->n_tri; t++) {
             const utw_triangle *tri = &mesh->tri[t];
-            if (quality(mesh, t) >= GOOD_QUALITY) continue;
+            if (utw_mesh_triangle_quality(mesh, t) >= GOOD_QUALITY) continue;
             for (int k = 0; k < 3; k++)
                 if (utw_mesh_is_curved(mesh, tri, k)) any = marked[tri->side[k]] = 1;
         }
@@ -100,7 +100,7 @@ static int shorten(const utw_mesh *mesh, double *finer)
     unsigned char *done = utw_alloc((size_t)mesh->net->n_edge, 1);
     if (done == NULL) return 0; /* the next try then is finer everywhere */
     for (int t = 0; t < mesh->n_tri; t++) {
-        if (quality(mesh, t) >= UTW_LEAST_QUALITY) continue;
+        if (utw_mesh_triangle_quality(mesh, t) >= UTW_LEAST_QUALITY) continue;
         for (int k = 0; k < 3; k++) {
             const int edge = mesh->tri[t].curve[k];
             if (edge < 0 || done[edge]) continue;

@@ -56,6 +56,10 @@ double utw_mesh_corner_angle(const utw_mesh *mesh, const utw_triangle *tri, int 
 /** 1 when the side lies on a curve that is not a straight line. */
 int utw_mesh_is_curved(const utw_mesh *mesh, const utw_triangle *tri, int k);
 
+/** Smallest ratio of the map's determinant to that of the straight triangle over one element; -1
+ * when its corners run the wrong way round. */
+double utw_mesh_triangle_quality(const utw_mesh *mesh, int t);
+
 /** Smallest ratio, over all elements, of the map's determinant to that of the straight triangle
  * (mesh/blend.h); 1 on straight meshes, not positive when an element folds. Below UTW_LEAST_QUALITY
  * a mesh is not used. */

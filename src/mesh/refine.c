@@ -6,7 +6,6 @@
 
 #include "base/memory.h"
 #include "base/status.h"
-#include "mesh/blend.h"
 #include "mesh/layers.h"
 
 /* Below this quality a triangle is bent: it is cut from the middle of its curved sides, and never
@@ -24,13 +23,6 @@ typedef struct refining {
     int *parent; /* [n_tri] triangles of the mesh that is refined */
 } refining;
 
-static double quality(const utw_mesh *mesh, int t)
-{
-    utw_blend blend;
-    utw_blend_of(mesh, &mesh->tri[t], &blend);
-    return utw_blend_quality(&blend);
-}
-
 /* Nodes with curved triangles around them get no layers. served[t] is set for the triangles that
  * are cut by layers. */
 static utw_status plan_layers(const utw_mesh *mesh, const unsigned char *wanted, int *layers,
@@ -43,7 +35,8 @@ static utw_status plan_layers(const utw_mesh *mesh, const unsigned char *wanted,
     for (int t = 0; t < mesh->n_tri; t++)
         for (int k = 0; k < 3; k++) {
             const int node = mesh->tri[t].node[k];
-            if (node < n && !closed[node]) closed[node] = quality(mesh, t) < STRAIGHT;
+            if (node < n && !closed[node])
+                closed[node] = utw_mesh_triangle_quality(mesh, t) < STRAIGHT;
         }
     for (int t = 0; t < mesh->n_tri; t++)
         for (int k = 0; wanted[t] && k < 3; k++) {
@@ -114,7 +107,7 @@ static utw_status cut(refining *r, const unsigned char *wanted, utw_error *err)
     UTW_TRY_ALLOC(served = utw_alloc((size_t)mesh->n_tri, 1));
     UTW_TRY_ALLOC(bent = utw_alloc((size_t)mesh->n_tri, 1));
     UTW_TRY_ALLOC(marked = utw_alloc((size_t)mesh->n_edge, 1));
-    for (int t = 0; t < mesh->n_tri; t++) bent[t] = quality(mesh, t) < BENT;
+    for (int t = 0; t < mesh->n_tri; t++) bent[t] = utw_mesh_triangle_quality(mesh, t) < BENT;
     UTW_TRY(plan_layers(mesh, wanted, layers, served, err));
     if (mark_sides(mesh, wanted, served, bent, marked)) {
         UTW_TRY(utw_mesh_halve(mesh, marked, err));

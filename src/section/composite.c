@@ -95,14 +95,6 @@ static utw_interval by_change(double now, double before, double rounding)
     return utw_about(now, fabs(now - before) + rounding);
 }
 
-static void put(utw_constant_value *value, utw_constant which, utw_trust trust, utw_interval q,
-                double factor, double shift)
-{
-    const utw_interval s = utw_times(factor, q);
-    value[which].quantity = (utw_quantity){s.value + shift, s.low + shift, s.high + shift, trust};
-    value[which].absent = UTW_OK;
-}
-
 void utw_constants_of_composite(const utw_area *area, double scale, const utw_solved *solved,
                                 utw_constant_value *value)
 {
@@ -122,17 +114,17 @@ void utw_constants_of_composite(const utw_area *area, double scale, const utw_so
     const double squares = m->product[UTW_TORSION];
     utw_interval Iw = by_change(now.Iw, before.Iw, 1e-12 * squares);
     Iw.low = fmax(Iw.low, 0);
-    put(value, UTW_J, UTW_BRACKET, J, s2 * s2, 0);
-    put(value, UTW_XS, UTW_ESTIMATE, s[0], scale, area->xc);
-    put(value, UTW_YS, UTW_ESTIMATE, s[1], scale, area->yc);
-    put(value, UTW_IW, UTW_ESTIMATE, Iw, s2 * s2 * s2, 0);
+    utw_constant_put(value, UTW_J, UTW_BRACKET, J, s2 * s2, 0);
+    utw_constant_put(value, UTW_XS, UTW_ESTIMATE, s[0], scale, area->xc);
+    utw_constant_put(value, UTW_YS, UTW_ESTIMATE, s[1], scale, area->yc);
+    utw_constant_put(value, UTW_IW, UTW_ESTIMATE, Iw, s2 * s2 * s2, 0);
     const double D = area->Ixx * area->Iyy - area->Ixy * area->Ixy;
     const double xr = area->Ixxx + area->Ixyy, yr = area->Ixxy + area->Iyyy;
-    put(value, UTW_BETAX, UTW_ESTIMATE, utw_times(-2, s[1]), scale,
-        (area->Iyy * yr - area->Ixy * xr) / D);
-    put(value, UTW_BETAY, UTW_ESTIMATE, utw_times(-2, s[0]), scale,
-        (area->Ixx * xr - area->Ixy * yr) / D);
+    utw_constant_put(value, UTW_BETAX, UTW_ESTIMATE, utw_times(-2, s[1]), scale,
+                     (area->Iyy * yr - area->Ixy * xr) / D);
+    utw_constant_put(value, UTW_BETAY, UTW_ESTIMATE, utw_times(-2, s[0]), scale,
+                     (area->Ixx * xr - area->Ixy * yr) / D);
     const utw_interval r2 = utw_plus(utw_exactly((area->Ixx + area->Iyy) / area->A / s2),
                                      utw_plus(utw_square(s[0]), utw_square(s[1])));
-    put(value, UTW_R0, UTW_ESTIMATE, utw_root(r2), scale, 0);
+    utw_constant_put(value, UTW_R0, UTW_ESTIMATE, utw_root(r2), scale, 0);
 }

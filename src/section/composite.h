@@ -6,7 +6,6 @@
 #include "section/adapt.h"
 #include "section/area.h"
 #include "section/constants.h"
-#include "section/interval.h"
 
 /** Moduli against those of the first part's material, to which all constants are referred. */
 typedef struct utw_composite {

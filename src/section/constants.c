@@ -10,8 +10,6 @@
 
 #include <string.h>
 
-#include "section/interval.h"
-
 /* Rounding of the sums over all points, relative to the integral of the squares that enter;
  * measured below 1e-14. */
 #define ROUNDING 2e-14
@@ -72,8 +70,8 @@ static utw_interval stress_of(const utw_measures *m, const combination u, const 
                      half_width(m, u, v));
 }
 
-static void put(utw_constant_value *value, utw_constant which, utw_trust trust, utw_interval q,
-                double factor, double shift)
+void utw_constant_put(utw_constant_value *value, utw_constant which, utw_trust trust,
+                      utw_interval q, double factor, double shift)
 {
     const utw_interval s = utw_times(factor, q);
     value[which].quantity = (utw_quantity){s.value + shift, s.low + shift, s.high + shift, trust};
@@ -108,7 +106,7 @@ void utw_constants_of_area(const utw_area *a, utw_constant_value *value)
         {UTW_YP, a->yp},
     };
     for (size_t i = 0; i < sizeof list / sizeof *list; i++)
-        put(value, list[i].which, UTW_EXACT, utw_exactly(list[i].x), 1, 0);
+        utw_constant_put(value, list[i].which, UTW_EXACT, utw_exactly(list[i].x), 1, 0);
 }
 
 /* xs = (Ixy int omega x - Iyy int omega y)/D, ys = (Ixx int omega x - Ixy int omega y)/D (Trefftz
@@ -229,16 +227,16 @@ static void with_poisson(const moments *g, const utw_measures *m, utw_interval J
     }
     const double mu = nu / (2 * (1 + nu));
     /* torque of the classical stresses (mean twist zero): Vy xf - Vx yf */
-    put(value, UTW_XF, UTW_BRACKET, utw_plus(s[0], utw_times(mu, anticlastic_torque(g, m, 1))),
-        scale, area->xc);
-    put(value, UTW_YF, UTW_BRACKET, utw_plus(s[1], utw_times(-mu, anticlastic_torque(g, m, 0))),
-        scale, area->yc);
+    utw_constant_put(value, UTW_XF, UTW_BRACKET,
+                     utw_plus(s[0], utw_times(mu, anticlastic_torque(g, m, 1))), scale, area->xc);
+    utw_constant_put(value, UTW_YF, UTW_BRACKET,
+                     utw_plus(s[1], utw_times(-mu, anticlastic_torque(g, m, 0))), scale, area->yc);
     const utw_interval As[2] = {utw_inverse(shear_flexibility(g, m, J, mu, 0)),
                                 utw_inverse(shear_flexibility(g, m, J, mu, 1))};
-    put(value, UTW_ASX, UTW_BRACKET, As[0], scale * scale, 0);
-    put(value, UTW_ASY, UTW_BRACKET, As[1], scale * scale, 0);
-    put(value, UTW_KX, UTW_BRACKET, As[0], 1 / g->A, 0);
-    put(value, UTW_KY, UTW_BRACKET, As[1], 1 / g->A, 0);
+    utw_constant_put(value, UTW_ASX, UTW_BRACKET, As[0], scale * scale, 0);
+    utw_constant_put(value, UTW_ASY, UTW_BRACKET, As[1], scale * scale, 0);
+    utw_constant_put(value, UTW_KX, UTW_BRACKET, As[0], 1 / g->A, 0);
+    utw_constant_put(value, UTW_KY, UTW_BRACKET, As[1], 1 / g->A, 0);
 }
 
 void utw_constants_of_solution(const utw_area *area, double scale, const utw_solved *solved,
@@ -250,16 +248,17 @@ void utw_constants_of_solution(const utw_area *area, double scale, const utw_sol
     const double s2 = scale * scale;
     utw_interval s[2], beta[2];
     const utw_interval J = stress_of(m, torsion, torsion);
-    put(value, UTW_J, UTW_BRACKET, J, s2 * s2, 0);
+    utw_constant_put(value, UTW_J, UTW_BRACKET, J, s2 * s2, 0);
     shear_centre(&g, m, s);
-    put(value, UTW_XS, UTW_BRACKET, s[0], scale, area->xc);
-    put(value, UTW_YS, UTW_BRACKET, s[1], scale, area->yc);
-    put(value, UTW_IW, UTW_ESTIMATE, warping_estimate(&g, m, J.value), s2 * s2 * s2, 0);
+    utw_constant_put(value, UTW_XS, UTW_BRACKET, s[0], scale, area->xc);
+    utw_constant_put(value, UTW_YS, UTW_BRACKET, s[1], scale, area->yc);
+    utw_constant_put(value, UTW_IW, UTW_ESTIMATE, warping_estimate(&g, m, J.value), s2 * s2 * s2,
+                     0);
     with_poisson(&g, m, J, s, nu, area, scale, value);
     monosymmetry(&g, s, beta);
-    put(value, UTW_BETAX, UTW_BRACKET, beta[0], scale, 0);
-    put(value, UTW_BETAY, UTW_BRACKET, beta[1], scale, 0);
+    utw_constant_put(value, UTW_BETAX, UTW_BRACKET, beta[0], scale, 0);
+    utw_constant_put(value, UTW_BETAY, UTW_BRACKET, beta[1], scale, 0);
     const utw_interval r2 =
         utw_plus(utw_exactly((g.Ixx + g.Iyy) / g.A), utw_plus(utw_square(s[0]), utw_square(s[1])));
-    put(value, UTW_R0, UTW_BRACKET, utw_root(r2), scale, 0);
+    utw_constant_put(value, UTW_R0, UTW_BRACKET, utw_root(r2), scale, 0);
 }

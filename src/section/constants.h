@@ -5,12 +5,17 @@
 
 #include "section/adapt.h"
 #include "section/area.h"
+#include "section/interval.h"
 
 /** What a constant is, or why there is none. */
 typedef struct utw_constant_value {
     utw_quantity quantity;
     utw_status absent; /* UTW_OK: the quantity holds; UTW_E_MATERIAL, UTW_E_UNBOUNDED: left out */
 } utw_constant_value;
+
+/** Set one constant to factor * q + shift. */
+void utw_constant_put(utw_constant_value *value, utw_constant which, utw_trust trust,
+                      utw_interval q, double factor, double shift);
 
 /** The area integrals of constants A .. yp, exact. */
 void utw_constants_of_area(const utw_area *area, utw_constant_value *value);
